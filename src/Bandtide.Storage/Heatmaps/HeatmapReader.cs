@@ -1,0 +1,13 @@
+using Bandtide.Core.Heatmaps;
+
+namespace Bandtide.Storage.Heatmaps;
+
+/// <summary>Answers heatmap queries from month tiles, or from day sheets where the question needs them.</summary>
+public sealed class HeatmapReader
+{
+    /// <summary>The revision alone, cheap: what an <c>ETag</c> is made of. <c>null</c>: no such station or region.</summary>
+    public Task<string?> RevisionAsync(HeatmapQuery query, CancellationToken ct) => throw new NotImplementedException();
+
+    /// <summary>The heatmap.</summary>
+    public Task<HeatmapOutcome> ReadAsync(HeatmapQuery query, CancellationToken ct) => throw new NotImplementedException();
+}
