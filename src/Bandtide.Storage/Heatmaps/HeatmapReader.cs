@@ -6,8 +6,8 @@ namespace Bandtide.Storage.Heatmaps;
 public sealed class HeatmapReader
 {
     /// <summary>The revision alone, cheap: what an <c>ETag</c> is made of. <c>null</c>: no such station or region.</summary>
-    public Task<string?> RevisionAsync(HeatmapQuery query, CancellationToken ct) => throw new NotImplementedException();
+    public Task<string?> RevisionAsync(HeatmapQuery query, CancellationToken ct) => throw new NotSupportedException("Not built yet.");
 
     /// <summary>The heatmap.</summary>
-    public Task<HeatmapOutcome> ReadAsync(HeatmapQuery query, CancellationToken ct) => throw new NotImplementedException();
+    public Task<HeatmapOutcome> ReadAsync(HeatmapQuery query, CancellationToken ct) => throw new NotSupportedException("Not built yet.");
 }

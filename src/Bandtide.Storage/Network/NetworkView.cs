@@ -20,8 +20,8 @@ public sealed class NetworkView
     public required IReadOnlyList<Region> Regions { get; init; }
 
     /// <summary>The station of a code, or <c>null</c>.</summary>
-    public Station? FindStation(string code) => throw new NotImplementedException();
+    public Station? FindStation(string code) => throw new NotSupportedException("Not built yet.");
 
     /// <summary>The region of a code, or <c>null</c>; <c>all</c>, <c>itu-n</c>, <c>field-xx</c> and <c>square-xxnn</c> always exist.</summary>
-    public Region? FindRegion(string code) => throw new NotImplementedException();
+    public Region? FindRegion(string code) => throw new NotSupportedException("Not built yet.");
 }
