@@ -12,7 +12,8 @@ namespace Bandtide.Core.Sun;
 /// <param name="DeclinationDegrees">Declination, -23.5 to 23.5.</param>
 /// <param name="DistanceAstronomicalUnits">Distance from the Earth.</param>
 /// <param name="GreenwichHourAngleDegrees">Hour angle at the prime meridian, westward, 0 up to 360.</param>
-/// <param name="EquationOfTimeMinutes">Apparent minus mean solar time in minutes.</param>
+/// <param name="EquationOfTimeMinutes">Apparent minus mean solar time in minutes, as the hour angles give it. The usual series
+/// (Meeus, equation 28.1) takes the mean Sun at TT instead of UT, which makes it 0.003 minutes greater in our times.</param>
 internal readonly record struct ApparentSun(
     double RightAscensionDegrees, double DeclinationDegrees, double DistanceAstronomicalUnits, double GreenwichHourAngleDegrees, double EquationOfTimeMinutes)
 {
@@ -36,23 +37,19 @@ internal readonly record struct ApparentSun(
             Math.Sin(longitude) * Math.Cos(obliquity) - Math.Tan(latitude) * Math.Sin(obliquity), Math.Cos(longitude))));
         var declination = double.RadiansToDegrees(Math.Asin(
             Math.Sin(latitude) * Math.Cos(obliquity) + Math.Cos(latitude) * Math.Sin(obliquity) * Math.Sin(longitude)));
-        var equationOfEquinoxes = nutation.LongitudeDegrees * Math.Cos(obliquity);
-        var siderealTime = MeanSiderealTimeDegrees(days) + equationOfEquinoxes;
-
-        // The constant is the mean aberration, so that the mean Sun is seen as the true one is (Meeus, equation 28.1).
-        var equationOfTime = Angles.Wrap180(MeanLongitudeDegrees(millennia) - 0.0057183 - rightAscension + equationOfEquinoxes);
-        return new(rightAscension, declination, distance, Angles.Wrap360(siderealTime - rightAscension), 4 * equationOfTime);
+        var siderealTime = MeanSiderealTimeDegrees(days) + nutation.LongitudeDegrees * Math.Cos(obliquity);
+        var hourAngle = Angles.Wrap360(siderealTime - rightAscension);
+        return new(rightAscension, declination, distance, hourAngle, 4 * Angles.Wrap180(hourAngle - MeanHourAngleDegrees(days)));
     }
+
+    // Of the mean Sun, which universal time follows: 0 at 12:00 UT.
+    private static double MeanHourAngleDegrees(double days) => 360 * (days - Math.Floor(days));
 
     // Meeus, equation 12.4; the whole turns are taken off first to keep digits.
     private static double MeanSiderealTimeDegrees(double days)
     {
         var centuries = days / DaysPerCentury;
-        return 280.46061837 + 360 * (days - Math.Floor(days)) + 0.98564736629 * days
+        return 280.46061837 + MeanHourAngleDegrees(days) + 0.98564736629 * days
             + Polynomial(centuries, [0, 0, 0.000387933, -1 / 38710000.0]);
     }
-
-    // Meeus, equation 28.2.
-    private static double MeanLongitudeDegrees(double millennia) =>
-        Polynomial(millennia, [280.4664567, 360007.6982779, 0.03032028, 1 / 49931.0, -1 / 15300.0, -1 / 2000000.0]);
 }
