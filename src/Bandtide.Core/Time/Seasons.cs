@@ -3,8 +3,8 @@ namespace Bandtide.Core.Time;
 /// <summary>Meteorological seasons of either hemisphere as calendar months.</summary>
 /// <remarks>
 /// The season that spans New Year (December to February) takes January's year in both hemispheres: the northern winter
-/// and the southern summer of 2026 both begin in December 2025. Source: WMO-No. 1203, Guidelines on the Calculation of
-/// Climate Normals, for the three-month groups; the year's name is this project's convention.
+/// and the southern summer of 2026 both begin in December 2025. The three-month groups are common practice in meteorology and
+/// climatology; the year's name is this project's convention.
 /// </remarks>
 public static class Seasons
 {
