@@ -1,5 +1,5 @@
-using Bandtide.Storage.Model;
 using Microsoft.EntityFrameworkCore;
+using Npgsql;
 
 namespace Bandtide.Storage;
 
@@ -27,6 +27,9 @@ public static class StoreProvider
             _ => throw Unknown(provider),
         };
     }
+
+    internal static void UseBandtide(this DbContextOptionsBuilder builder, NpgsqlDataSource source) =>
+        builder.UseNpgsql(source, postgres => postgres.MigrationsAssembly(PostgresMigrations));
 
     internal static InvalidOperationException Unknown(string? provider) =>
         new($"Storage:Provider '{provider}' is not known; it is {Sqlite} or {Postgres}.");

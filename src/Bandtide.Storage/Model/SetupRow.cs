@@ -1,3 +1,5 @@
+using Bandtide.Core.Stations;
+
 namespace Bandtide.Storage.Model;
 
 /// <summary>One setup of a station. Setups are added, never changed: of two with the same first date the later entry counts.</summary>
@@ -15,8 +17,7 @@ internal sealed class SetupRow
     public double? MarginDb { get; set; }
     public int? Averages { get; set; }
 
-    /// <summary><c>power</c>, <c>log</c> or <c>peak</c>.</summary>
-    public string? Detector { get; set; }
+    public Detector? Detector { get; set; }
 
     public double? ResolutionHz { get; set; }
     public double? NoiseBandwidthHz { get; set; }

@@ -1,3 +1,5 @@
+using Bandtide.Core.Stations;
+
 namespace Bandtide.Storage.Model;
 
 /// <summary>A station as stored: a small table, read whole.</summary>
@@ -9,8 +11,7 @@ internal sealed class StationRow
     public double LatitudeDegrees { get; set; }
     public double LongitudeDegrees { get; set; }
 
-    /// <summary>As the data contract spells it.</summary>
-    public required string LevelUnit { get; set; }
+    public LevelUnit LevelUnit { get; set; }
 
     public int ItuRegion { get; set; }
 

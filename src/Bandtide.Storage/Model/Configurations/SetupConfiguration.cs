@@ -17,7 +17,7 @@ internal sealed class SetupConfiguration : IEntityTypeConfiguration<SetupRow>
         builder.Property(row => row.Threshold).HasColumnName("threshold").HasMaxLength(40);
         builder.Property(row => row.MarginDb).HasColumnName("margin_db");
         builder.Property(row => row.Averages).HasColumnName("averages");
-        builder.Property(row => row.Detector).HasColumnName("detector").HasMaxLength(8);
+        builder.Property(row => row.Detector).HasColumnName("detector").HasConversion<string>().HasMaxLength(8);
         builder.Property(row => row.ResolutionHz).HasColumnName("resolution_hz");
         builder.Property(row => row.NoiseBandwidthHz).HasColumnName("noise_bandwidth_hz");
         builder.Property(row => row.RevisitSeconds).HasColumnName("revisit_seconds");

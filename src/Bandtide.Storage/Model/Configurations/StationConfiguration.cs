@@ -16,7 +16,7 @@ internal sealed class StationConfiguration : IEntityTypeConfiguration<StationRow
         builder.Property(row => row.Name).HasColumnName("name").HasMaxLength(200);
         builder.Property(row => row.LatitudeDegrees).HasColumnName("latitude");
         builder.Property(row => row.LongitudeDegrees).HasColumnName("longitude");
-        builder.Property(row => row.LevelUnit).HasColumnName("level_unit").HasMaxLength(8);
+        builder.Property(row => row.LevelUnit).HasColumnName("level_unit").HasConversion<string>().HasMaxLength(20);
         builder.Property(row => row.ItuRegion).HasColumnName("itu_region");
         builder.Property(row => row.CreatedAt).HasColumnName("created_at");
     }

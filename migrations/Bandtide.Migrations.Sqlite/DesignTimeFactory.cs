@@ -1,0 +1,17 @@
+using Bandtide.Storage;
+using Bandtide.Storage.Model;
+using Microsoft.EntityFrameworkCore;
+using Microsoft.EntityFrameworkCore.Design;
+
+namespace Bandtide.Migrations.Sqlite;
+
+/// <summary>What the migration tool makes the context with. It never connects.</summary>
+internal sealed class DesignTimeFactory : IDesignTimeDbContextFactory<BandtideContext>
+{
+    public BandtideContext CreateDbContext(string[] args)
+    {
+        var builder = new DbContextOptionsBuilder<BandtideContext>();
+        builder.UseBandtide(StoreProvider.Sqlite);
+        return new(builder.Options);
+    }
+}

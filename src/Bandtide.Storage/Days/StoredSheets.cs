@@ -1,0 +1,27 @@
+using System.Globalization;
+using Bandtide.Core.Sheets;
+using Bandtide.Core.Time;
+using Bandtide.Storage.Engine;
+
+namespace Bandtide.Storage.Days;
+
+/// <summary>Unpacks stored sheets.</summary>
+internal static class StoredSheets
+{
+    /// <summary>The cells of a stored sheet.</summary>
+    /// <exception cref="InvalidDataException">The bytes are damaged; the message names station and date.</exception>
+    public static CellGrid Decode(int stationId, int date, byte[] bytes)
+    {
+        try
+        {
+            return SheetCodec.Decode(bytes);
+        }
+        catch (Exception exception) when (exception is FormatException or InvalidDataException)
+        {
+            throw new InvalidDataException(
+                string.Create(CultureInfo.InvariantCulture,
+                    $"The stored sheet of station {stationId}, {DateText.Format(EpochDay.ToDate(date))} is damaged: {exception.Message}"),
+                exception);
+        }
+    }
+}

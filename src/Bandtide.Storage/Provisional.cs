@@ -1,0 +1,62 @@
+#pragma warning disable
+using Bandtide.Core.Bands;
+using Bandtide.Core.Heatmaps;
+using Bandtide.Core.Stations;
+using Bandtide.Core.Tiles;
+
+namespace Bandtide.Core.Sheets
+{
+    internal static class SheetRule { public const string Copy = "copy"; }
+    internal static class SheetWarnings { public static IReadOnlyList<SheetWarning> Of(DaySheet s, Station st, BandPlan p) => []; }
+    internal static class SheetChecksum { public static byte[] Of(CellGrid g) => System.Security.Cryptography.SHA256.HashData(SheetCodec.Encode(g))[..16]; }
+    internal static class SheetCodec
+    {
+        public static byte[] Encode(CellGrid g)
+        {
+            var s = new MemoryStream(); var w = new BinaryWriter(s);
+            w.Write(g.BandCount); foreach (var b in g.BandIds) w.Write(b);
+            foreach (var q in Enum.GetValues<Quantity>()) { var p = g.Plane(q); w.Write(p.Length); foreach (var v in p) w.Write(v); }
+            w.Write(System.IO.Hashing.Crc.Of(s.ToArray()));
+            return s.ToArray();
+        }
+        public static CellGrid Decode(byte[] bytes)
+        {
+            if (System.IO.Hashing.Crc.Of(bytes[..^4]) != BitConverter.ToUInt32(bytes.AsSpan(bytes.Length - 4))) throw new InvalidDataException("crc");
+            var r = new BinaryReader(new MemoryStream(bytes));
+            var ids = new short[r.ReadInt32()]; for (var i = 0; i < ids.Length; i++) ids[i] = r.ReadInt16();
+            var planes = new int[]?[8];
+            for (var q = 0; q < 8; q++) { var n = r.ReadInt32(); if (n > 0) { planes[q] = new int[n]; for (var i = 0; i < n; i++) planes[q]![i] = r.ReadInt32(); } }
+            return new(ids, planes);
+        }
+    }
+}
+namespace System.IO.Hashing { internal static class Crc { public static uint Of(byte[] b) { uint h = 2166136261; foreach (var x in b) h = (h ^ x) * 16777619; return h; } } }
+namespace Bandtide.Core.Tiles
+{
+    using Bandtide.Core.Sheets;
+    internal static class Prov
+    {
+        extension(MonthTile)
+        {
+            public static MonthTile? FromSheets(Measure m, IReadOnlyList<CellGrid> sheets)
+            {
+                var ids = sheets.SelectMany(g => g.BandIds.ToArray()).Distinct().Order().ToArray();
+                var days = new byte[ids.Length * 24]; var sums = new int[days.Length]; var any = false;
+                foreach (var g in sheets) for (var h = 0; h < 24; h++) for (var b = 0; b < g.BandCount; b++)
+                {
+                    var v = m switch { Measure.Occupancy => g[Quantity.Occupancy, h, b], Measure.Signal => g[Quantity.Signal, h, b],
+                        Measure.Excess => g[Quantity.Signal, h, b] is var s && s != CellGrid.Missing && g[Quantity.Floor, h, b] is var f && f != CellGrid.Missing ? s - f : CellGrid.Missing,
+                        Measure.Level => g[Quantity.Level, h, b], Measure.LevelP90 => g[Quantity.LevelP90, h, b], Measure.Floor => g[Quantity.Floor, h, b], _ => g[Quantity.Steady, h, b] };
+                    if (v == CellGrid.Missing) continue;
+                    var i = h * ids.Length + Array.BinarySearch(ids, g.BandIds[b]); days[i]++; sums[i] += v; any = true;
+                }
+                return any ? new(ids, days, sums) : null;
+            }
+        }
+    }
+    internal static class MonthTileCodec
+    {
+        public static byte[] Encode(MonthTile t) { var w = new MemoryStream(); var b = new BinaryWriter(w); b.Write(t.BandCount); foreach (var i in t.BandIds) b.Write(i); b.Write(t.Days); foreach (var s in t.Sums) b.Write(s); return w.ToArray(); }
+        public static MonthTile Decode(byte[] x) { var r = new BinaryReader(new MemoryStream(x)); var ids = new short[r.ReadInt32()]; for (var i = 0; i < ids.Length; i++) ids[i] = r.ReadInt16(); var d = r.ReadBytes(ids.Length * 24); var s = new int[d.Length]; for (var i = 0; i < s.Length; i++) s[i] = r.ReadInt32(); return new(ids, d, s); }
+    }
+}
