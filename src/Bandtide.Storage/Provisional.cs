@@ -1,10 +1,12 @@
+// Stands in for the packed formats until the core has them.
 #pragma warning disable
 using Bandtide.Core.Bands;
 using Bandtide.Core.Heatmaps;
+using Bandtide.Core.Sheets;
 using Bandtide.Core.Stations;
 using Bandtide.Core.Tiles;
 
-namespace Bandtide.Core.Sheets
+namespace Bandtide.Storage
 {
     internal static class SheetRule { public const string Copy = "copy"; }
     internal static class SheetWarnings { public static IReadOnlyList<SheetWarning> Of(DaySheet s, Station st, BandPlan p) => []; }
@@ -16,12 +18,12 @@ namespace Bandtide.Core.Sheets
             var s = new MemoryStream(); var w = new BinaryWriter(s);
             w.Write(g.BandCount); foreach (var b in g.BandIds) w.Write(b);
             foreach (var q in Enum.GetValues<Quantity>()) { var p = g.Plane(q); w.Write(p.Length); foreach (var v in p) w.Write(v); }
-            w.Write(System.IO.Hashing.Crc.Of(s.ToArray()));
+            w.Write(Crc.Of(s.ToArray()));
             return s.ToArray();
         }
         public static CellGrid Decode(byte[] bytes)
         {
-            if (System.IO.Hashing.Crc.Of(bytes[..^4]) != BitConverter.ToUInt32(bytes.AsSpan(bytes.Length - 4))) throw new InvalidDataException("crc");
+            if (Crc.Of(bytes[..^4]) != BitConverter.ToUInt32(bytes.AsSpan(bytes.Length - 4))) throw new InvalidDataException("crc");
             var r = new BinaryReader(new MemoryStream(bytes));
             var ids = new short[r.ReadInt32()]; for (var i = 0; i < ids.Length; i++) ids[i] = r.ReadInt16();
             var planes = new int[]?[8];
@@ -30,10 +32,9 @@ namespace Bandtide.Core.Sheets
         }
     }
 }
-namespace System.IO.Hashing { internal static class Crc { public static uint Of(byte[] b) { uint h = 2166136261; foreach (var x in b) h = (h ^ x) * 16777619; return h; } } }
-namespace Bandtide.Core.Tiles
+namespace Bandtide.Storage { internal static class Crc { public static uint Of(byte[] b) { uint h = 2166136261; foreach (var x in b) h = (h ^ x) * 16777619; return h; } } }
+namespace Bandtide.Storage
 {
-    using Bandtide.Core.Sheets;
     internal static class Prov
     {
         extension(MonthTile)

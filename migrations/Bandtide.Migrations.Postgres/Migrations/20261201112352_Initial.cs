@@ -1,4 +1,4 @@
-﻿using Microsoft.EntityFrameworkCore.Migrations;
+using Microsoft.EntityFrameworkCore.Migrations;
 using Npgsql.EntityFrameworkCore.PostgreSQL.Metadata;
 
 #nullable disable
@@ -314,6 +314,8 @@ namespace Bandtide.Migrations.Postgres.Migrations
                 table: "station",
                 column: "code",
                 unique: true);
+
+            StorageTuning.Apply(migrationBuilder);
         }
 
         /// <inheritdoc />

@@ -114,7 +114,16 @@ internal sealed class SqliteDialect(string file) : IStoreDialect, IDisposable
         month => [month],
         ct);
 
-    public void Dispose() => writers.Dispose();
+    /// <summary>Closes the idle connections, whereupon SQLite folds its log into the file.</summary>
+    public void Dispose()
+    {
+        using (var pool = new SqliteConnection(connectionString))
+        {
+            SqliteConnection.ClearPool(pool);
+        }
+
+        writers.Dispose();
+    }
 
     // One prepared statement, run once per row.
     private static async Task EachAsync<T>(
