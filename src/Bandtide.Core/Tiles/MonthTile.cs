@@ -1,3 +1,6 @@
+using Bandtide.Core.Heatmaps;
+using Bandtide.Core.Sheets;
+
 namespace Bandtide.Core.Tiles;
 
 /// <summary>
@@ -43,4 +46,69 @@ public sealed class MonthTile
 
     /// <summary>Sums per cell.</summary>
     public ReadOnlySpan<int> Sums => sums;
+
+    /// <summary>Sums a month's sheets.</summary>
+    /// <param name="measure">The measure.</param>
+    /// <param name="sheets">At most 31, of one month, in any order.</param>
+    /// <returns>The tile over the bands that have the measure, or <c>null</c> when no cell has it.</returns>
+    public static MonthTile? FromSheets(Measure measure, IReadOnlyCollection<CellGrid> sheets)
+    {
+        ArgumentNullException.ThrowIfNull(sheets);
+        var bands = BandsWith(measure, sheets);
+        if (bands.Length == 0)
+        {
+            return null;
+        }
+
+        var counts = new byte[24 * bands.Length];
+        var totals = new int[counts.Length];
+        Span<int> scratch = new int[sheets.Max(sheet => sheet.Plane(Quantity.Sweeps).Length)];
+        foreach (var sheet in sheets)
+        {
+            var values = Measures.Values(sheet, measure, scratch);
+            if (values.IsEmpty)
+            {
+                continue;
+            }
+
+            for (var b = 0; b < sheet.BandCount; b++)
+            {
+                var target = Array.BinarySearch(bands, sheet.BandIds[b]);
+                if (target < 0)
+                {
+                    continue;
+                }
+
+                for (var (i, j) = (b, target); i < values.Length; i += sheet.BandCount, j += bands.Length)
+                {
+                    if (values[i] != CellGrid.Missing)
+                    {
+                        counts[j]++;
+                        totals[j] += values[i];
+                    }
+                }
+            }
+        }
+
+        return new(bands, counts, totals);
+    }
+
+    private static short[] BandsWith(Measure measure, IReadOnlyCollection<CellGrid> sheets)
+    {
+        var found = new SortedSet<short>();
+        foreach (var sheet in sheets)
+        {
+            Span<int> scratch = measure == Measure.Excess ? new int[sheet.Plane(Quantity.Sweeps).Length] : default;
+            var values = Measures.Values(sheet, measure, scratch);
+            for (var i = 0; i < values.Length; i++)
+            {
+                if (values[i] != CellGrid.Missing)
+                {
+                    found.Add(sheet.BandIds[i % sheet.BandCount]);
+                }
+            }
+        }
+
+        return [.. found];
+    }
 }
