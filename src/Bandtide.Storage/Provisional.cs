@@ -8,33 +8,6 @@ using Bandtide.Core.Tiles;
 
 namespace Bandtide.Storage
 {
-    internal static class SheetRule { public const string Copy = "copy"; }
-    internal static class SheetWarnings { public static IReadOnlyList<SheetWarning> Of(DaySheet s, Station st, BandPlan p) => []; }
-    internal static class SheetChecksum { public static byte[] Of(CellGrid g) => System.Security.Cryptography.SHA256.HashData(SheetCodec.Encode(g))[..16]; }
-    internal static class SheetCodec
-    {
-        public static byte[] Encode(CellGrid g)
-        {
-            var s = new MemoryStream(); var w = new BinaryWriter(s);
-            w.Write(g.BandCount); foreach (var b in g.BandIds) w.Write(b);
-            foreach (var q in Enum.GetValues<Quantity>()) { var p = g.Plane(q); w.Write(p.Length); foreach (var v in p) w.Write(v); }
-            w.Write(Crc.Of(s.ToArray()));
-            return s.ToArray();
-        }
-        public static CellGrid Decode(byte[] bytes)
-        {
-            if (Crc.Of(bytes[..^4]) != BitConverter.ToUInt32(bytes.AsSpan(bytes.Length - 4))) throw new InvalidDataException("crc");
-            var r = new BinaryReader(new MemoryStream(bytes));
-            var ids = new short[r.ReadInt32()]; for (var i = 0; i < ids.Length; i++) ids[i] = r.ReadInt16();
-            var planes = new int[]?[8];
-            for (var q = 0; q < 8; q++) { var n = r.ReadInt32(); if (n > 0) { planes[q] = new int[n]; for (var i = 0; i < n; i++) planes[q]![i] = r.ReadInt32(); } }
-            return new(ids, planes);
-        }
-    }
-}
-namespace Bandtide.Storage { internal static class Crc { public static uint Of(byte[] b) { uint h = 2166136261; foreach (var x in b) h = (h ^ x) * 16777619; return h; } } }
-namespace Bandtide.Storage
-{
     internal static class Prov
     {
         extension(MonthTile)

@@ -50,7 +50,7 @@ public static class StorageServices
         services.AddSingleton(provider => new DayStore(Database(provider), provider.GetRequiredService<NetworkStore>(), Clock(provider)));
         services.AddSingleton(provider => new HeatmapReader(Database(provider), provider.GetRequiredService<NetworkStore>(), options));
         services.AddSingleton(provider => new CoverageReader(Database(provider), provider.GetRequiredService<NetworkStore>(), Clock(provider)));
-        services.AddSingleton(provider => new StoreMaintenance(Database(provider), options));
+        services.AddSingleton(provider => new StoreMaintenance(Database(provider), provider.GetRequiredService<NetworkStore>(), options));
         return services;
     }
 

@@ -1,4 +1,3 @@
-using Bandtide.Core.Sheets;
 using Bandtide.Core.Stations;
 using Bandtide.Storage.Engine;
 using Bandtide.Storage.Network;
@@ -33,9 +32,7 @@ public sealed class DayStore
 
         // All that needs no lock comes before the transaction.
         var plan = (await network.GetAsync(ct)).Plan;
-        var upload = new DayUpload(station, days, restoreWithdrawn, clock.GetUtcNow());
-        var warnings = days.Select(day => SheetWarnings.Of(day.Sheet, station, plan)).ToList();
-
+        var upload = new DayUpload(station, days, restoreWithdrawn, plan, clock.GetUtcNow());
         var (decisions, copies) = await database.WriteAsync(async session =>
         {
             var writer = new DayWriter(session, station.Id);
@@ -51,7 +48,7 @@ public sealed class DayStore
             return ((decided, earliest), changes.Count > 0);
         }, ct);
 
-        return upload.Receipts(decisions, copies, warnings);
+        return upload.Receipts(decisions, copies);
     }
 
     /// <summary>One day with its cells, current or an old revision; <c>null</c> when there is none.</summary>

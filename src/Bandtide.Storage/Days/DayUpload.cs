@@ -1,7 +1,6 @@
-using System.Globalization;
+using Bandtide.Core.Bands;
 using Bandtide.Core.Sheets;
 using Bandtide.Core.Stations;
-using Bandtide.Core.Time;
 using Bandtide.Storage.Engine;
 
 namespace Bandtide.Storage.Days;
@@ -9,19 +8,17 @@ namespace Bandtide.Storage.Days;
 /// <summary>Days on their way into the store: packed once, judged against what is current, answered with receipts.</summary>
 internal sealed class DayUpload
 {
-    /// <summary>Most entries of a receipt's warnings.</summary>
-    private const int MaxWarnings = 10;
-
     private readonly Station station;
     private readonly IReadOnlyList<PendingDay> days;
     private readonly bool restoreWithdrawn;
+    private readonly BandPlan plan;
     private readonly long receivedAt;
     private readonly PackedSheet[] sheets;
     private readonly int[] dates;
 
-    public DayUpload(Station station, IReadOnlyList<PendingDay> days, bool restoreWithdrawn, DateTimeOffset now)
+    public DayUpload(Station station, IReadOnlyList<PendingDay> days, bool restoreWithdrawn, BandPlan plan, DateTimeOffset now)
     {
-        (this.station, this.days, this.restoreWithdrawn) = (station, days, restoreWithdrawn);
+        (this.station, this.days, this.restoreWithdrawn, this.plan) = (station, days, restoreWithdrawn, plan);
         receivedAt = now.ToUnixTimeMilliseconds();
         dates = [.. days.Select(day => EpochDay.Of(day.Sheet.Date))];
         if (dates.Distinct().Count() != dates.Length)
@@ -29,7 +26,7 @@ internal sealed class DayUpload
             throw new ArgumentException("Dates must be distinct.", nameof(days));
         }
 
-        sheets = [.. days.Select(day => PackedSheet.Of(day.Sheet.Cells))];
+        sheets = [.. days.Select(day => PackedSheet.Of(day.Sheet.Cells, plan))];
     }
 
     public IReadOnlyCollection<int> Dates => dates;
@@ -57,9 +54,7 @@ internal sealed class DayUpload
     /// <summary>The receipts, in the order of the days.</summary>
     /// <param name="decisions">What storing did.</param>
     /// <param name="stored">The earliest other date with each checksum, by checksum text.</param>
-    /// <param name="warnings">What the sheets themselves gave cause to.</param>
-    public IReadOnlyList<DayReceipt> Receipts(
-        IReadOnlyList<(DayStatus Status, int Revision)> decisions, Dictionary<string, int> stored, IReadOnlyList<IReadOnlyList<SheetWarning>> warnings)
+    public IReadOnlyList<DayReceipt> Receipts(IReadOnlyList<(DayStatus Status, int Revision)> decisions, Dictionary<string, int> stored)
     {
         var earliest = new Dictionary<string, int>(stored, StringComparer.Ordinal);
         for (var i = 0; i < dates.Length; i++)
@@ -74,14 +69,10 @@ internal sealed class DayUpload
         return [.. days.Select((day, i) =>
         {
             var text = PackedSheet.Text(sheets[i].Checksum);
-            IEnumerable<SheetWarning> copy = earliest.TryGetValue(text, out var date) && date < dates[i] ? [CopyOf(date)] : [];
+            var original = earliest.TryGetValue(text, out var date) && date < dates[i] ? EpochDay.ToDate(date) : (DateOnly?)null;
             return new DayReceipt(
                 station.Code, day.Sheet.Date, decisions[i].Status, decisions[i].Revision, sheets[i].CellCount, text,
-                [.. day.ReaderWarnings.Concat(warnings[i]).Concat(copy).Take(MaxWarnings)]);
+                [.. day.ReaderWarnings.Concat(SheetWarnings.Find(day.Sheet, station, plan, original)).Take(SheetWarnings.Max)]);
         })];
     }
-
-    private static SheetWarning CopyOf(int date) => new(
-        SheetRule.Copy, 1, null, null,
-        string.Create(CultureInfo.InvariantCulture, $"All cells are equal to those of {DateText.Format(EpochDay.ToDate(date))}."));
 }

@@ -1,3 +1,4 @@
+using Bandtide.Core.Bands;
 using Bandtide.Core.Sheets;
 
 namespace Bandtide.Storage.Days;
@@ -10,8 +11,10 @@ namespace Bandtide.Storage.Days;
 /// <param name="BandCount">Bands with at least one cell.</param>
 internal sealed record PackedSheet(byte[] Bytes, byte[] Checksum, int CellCount, int HoursMask, int BandCount)
 {
-    public static PackedSheet Of(CellGrid cells) =>
-        new(SheetCodec.Encode(cells), SheetChecksum.Of(cells), cells.Count, cells.HoursMask(), cells.BandCount);
+    public static PackedSheet Of(CellGrid cells, BandPlan plan) =>
+        new(SheetCodec.Encode(cells), ChecksumOf(cells, plan), cells.Count, cells.HoursMask(), cells.BandCount);
+
+    public static byte[] ChecksumOf(CellGrid cells, BandPlan plan) => Convert.FromHexString(SheetChecksum.Compute(cells, plan));
 
     /// <summary>A checksum as receipts show it.</summary>
     public static string Text(byte[]? checksum) => checksum is null ? "" : Convert.ToHexStringLower(checksum);

@@ -16,7 +16,7 @@ internal static class StoredSheets
         {
             return SheetCodec.Decode(bytes);
         }
-        catch (Exception exception) when (exception is FormatException or InvalidDataException)
+        catch (SheetCorruptException exception)
         {
             throw new InvalidDataException(
                 string.Create(CultureInfo.InvariantCulture,

@@ -2,6 +2,7 @@ using System.Data;
 using System.Data.Common;
 using Bandtide.Storage.Days;
 using Bandtide.Storage.Tiles;
+using Microsoft.EntityFrameworkCore;
 using Npgsql;
 
 namespace Bandtide.Storage.Engine;
@@ -40,8 +41,11 @@ internal sealed class PostgresDialect(NpgsqlDataSource source) : IStoreDialect
 
     public bool IsPassing(Exception exception) => exception switch
     {
-        PostgresException failure => failure.SqlState is PostgresErrorCodes.SerializationFailure
-            or PostgresErrorCodes.DeadlockDetected or PostgresErrorCodes.AdminShutdown or PostgresErrorCodes.CannotConnectNow,
+        DbUpdateException { InnerException: { } cause } => IsPassing(cause),
+
+        // A unique value taken by another transaction in between is met again, and judged, by the next attempt.
+        PostgresException failure => failure.SqlState is PostgresErrorCodes.SerializationFailure or PostgresErrorCodes.DeadlockDetected
+            or PostgresErrorCodes.UniqueViolation or PostgresErrorCodes.AdminShutdown or PostgresErrorCodes.CannotConnectNow,
         NpgsqlException failure => failure.IsTransient,
         _ => false,
     };

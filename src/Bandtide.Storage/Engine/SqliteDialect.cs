@@ -4,6 +4,7 @@ using System.Globalization;
 using Bandtide.Storage.Days;
 using Bandtide.Storage.Tiles;
 using Microsoft.Data.Sqlite;
+using Microsoft.EntityFrameworkCore;
 
 namespace Bandtide.Storage.Engine;
 
@@ -57,7 +58,8 @@ internal sealed class SqliteDialect(string file) : IStoreDialect, IDisposable
         new(((SqliteConnection)connection).BeginTransaction(IsolationLevel.Serializable, deferred: true));
 
     public bool IsPassing(Exception exception) =>
-        exception is SqliteException { SqliteErrorCode: SQLitePCL.raw.SQLITE_BUSY or SQLitePCL.raw.SQLITE_LOCKED };
+        (exception is DbUpdateException { InnerException: { } cause } ? cause : exception)
+            is SqliteException { SqliteErrorCode: SQLitePCL.raw.SQLITE_BUSY or SQLitePCL.raw.SQLITE_LOCKED };
 
     public string InNumbers(string column, string parameter) => $"{column} IN (SELECT value FROM json_each({parameter}))";
 

@@ -1,7 +1,9 @@
 using System.Data.Common;
 using System.Globalization;
+using Bandtide.Core.Bands;
 using Bandtide.Core.Heatmaps;
 using Bandtide.Core.Sheets;
+using Bandtide.Core.Stations;
 using Bandtide.Core.Time;
 using Bandtide.Storage.Days;
 using Bandtide.Storage.Engine;
@@ -15,21 +17,21 @@ internal sealed class StationVerifier
     private const string Columns = "date, revision, cell_count, hours_mask, band_count, checksum, sheet";
 
     private readonly StoreSession session;
-    private readonly int station;
-    private readonly string code;
+    private readonly Station station;
+    private readonly BandPlan plan;
     private readonly VerifyTally tally;
 
-    private StationVerifier(StoreSession session, int station, string code, VerifyTally tally) =>
-        (this.session, this.station, this.code, this.tally) = (session, station, code, tally);
+    private StationVerifier(StoreSession session, Station station, BandPlan plan, VerifyTally tally) =>
+        (this.session, this.station, this.plan, this.tally) = (session, station, plan, tally);
 
     /// <summary>Adds what is wrong with a station to the tally.</summary>
-    public static async Task VerifyAsync(StoreDatabase database, int station, string code, VerifyTally tally, CancellationToken ct)
+    public static async Task VerifyAsync(StoreDatabase database, Station station, BandPlan plan, VerifyTally tally, CancellationToken ct)
     {
         try
         {
             await database.SnapshotAsync(async session =>
             {
-                var verifier = new StationVerifier(session, station, code, tally);
+                var verifier = new StationVerifier(session, station, plan, tally);
                 var heads = await verifier.SheetsAndTilesAsync(ct);
                 await verifier.RevisionsAsync(heads, ct);
                 return heads.Count;
@@ -37,7 +39,7 @@ internal sealed class StationVerifier
         }
         catch (DbException exception) when (!database.Dialect.IsPassing(exception))
         {
-            tally.Faults.Add(new(code, "", $"The database cannot read this station's rows: {exception.Message}"));
+            tally.Faults.Add(new(station.Code, "", $"The database cannot read this station's rows: {exception.Message}"));
         }
     }
 
@@ -49,7 +51,7 @@ internal sealed class StationVerifier
         var month = new List<CellGrid?>();
         var current = 0;
         await using var command = session.Command($"SELECT {Columns} FROM day_sheet WHERE station_id = @station ORDER BY date");
-        command.Add("@station", station);
+        command.Add("@station", station.Id);
         await using (var reader = await command.ExecuteReaderAsync(ct))
         {
             while (await reader.ReadAsync(ct))
@@ -82,7 +84,7 @@ internal sealed class StationVerifier
     private async Task<SortedDictionary<(int Month, Measure Measure), byte[]>> TilesAsync(CancellationToken ct)
     {
         await using var command = session.Command("SELECT month, measure, tile FROM month_tile WHERE station_id = @station");
-        command.Add("@station", station);
+        command.Add("@station", station.Id);
         var rows = await command.ListAsync(
             row => KeyValuePair.Create((row.GetInt32(0), (Measure)row.GetInt32(1)), row.GetFieldValue<byte[]>(2)), ct);
         return new(rows.ToDictionary());
@@ -93,14 +95,17 @@ internal sealed class StationVerifier
         var place = DateText.Format(EpochDay.ToDate(row.GetInt32(0)));
         try
         {
-            var cells = StoredSheets.Decode(station, row.GetInt32(0), row.GetFieldValue<byte[]>(6));
-            var packed = PackedSheet.Of(cells);
-            if (!packed.Checksum.AsSpan().SequenceEqual(row.IsDBNull(5) ? [] : row.GetFieldValue<byte[]>(5)))
+            var cells = StoredSheets.Decode(station.Id, row.GetInt32(0), row.GetFieldValue<byte[]>(6));
+            if (cells.BandIds.ToArray().FirstOrDefault(id => plan.ById(id) is null) is not 0 and var unknown)
+            {
+                Fault(place, string.Create(CultureInfo.InvariantCulture, $"There is no band with the identity {unknown}."));
+            }
+            else if (!PackedSheet.ChecksumOf(cells, plan).AsSpan().SequenceEqual(row.IsDBNull(5) ? [] : row.GetFieldValue<byte[]>(5)))
             {
                 Fault(place, "The checksum is not that of the cells.");
             }
 
-            if ((packed.CellCount, packed.HoursMask, packed.BandCount) != (row.GetInt32(2), row.GetInt32(3), row.GetInt32(4)))
+            if ((cells.Count, cells.HoursMask(), cells.BandCount) != (row.GetInt32(2), row.GetInt32(3), row.GetInt32(4)))
             {
                 Fault(place, "The counts of cells, hours and bands are not those of the cells.");
             }
@@ -147,7 +152,7 @@ internal sealed class StationVerifier
     {
         var next = heads.Keys.ToDictionary(date => date, _ => 1);
         await using var command = session.Command($"SELECT {Columns} FROM day_revision WHERE station_id = @station ORDER BY date, revision");
-        command.Add("@station", station);
+        command.Add("@station", station.Id);
         await using (var reader = await command.ExecuteReaderAsync(ct))
         {
             while (await reader.ReadAsync(ct))
@@ -179,5 +184,5 @@ internal sealed class StationVerifier
         }
     }
 
-    private void Fault(string place, string message) => tally.Faults.Add(new(code, place, message));
+    private void Fault(string place, string message) => tally.Faults.Add(new(station.Code, place, message));
 }

@@ -1,5 +1,6 @@
 using Bandtide.Core.Time;
 using Bandtide.Storage.Engine;
+using Bandtide.Storage.Network;
 using Bandtide.Storage.Tiles;
 using Microsoft.EntityFrameworkCore;
 
@@ -12,9 +13,11 @@ public sealed class StoreMaintenance
     private const int MonthsPerTransaction = 12;
 
     private readonly StoreDatabase database;
+    private readonly NetworkStore network;
     private readonly StoreOptions options;
 
-    internal StoreMaintenance(StoreDatabase database, StoreOptions options) => (this.database, this.options) = (database, options);
+    internal StoreMaintenance(StoreDatabase database, NetworkStore network, StoreOptions options) =>
+        (this.database, this.network, this.options) = (database, network, options);
 
     /// <summary>Creates the store or brings it to the current shape. Every start calls it; several may do so at once.</summary>
     public async Task MigrateAsync(CancellationToken ct)
@@ -42,9 +45,9 @@ public sealed class StoreMaintenance
     /// <exception cref="InvalidDataException">A sheet is damaged; the message names it. Stations before it are done.</exception>
     public async Task RebuildAsync(IProgress<RebuildProgress>? progress, CancellationToken ct)
     {
-        var stations = await StationCodesAsync(ct);
+        var stations = (await network.GetAsync(ct)).Stations;
         var (done, count) = (0, 0);
-        foreach (var station in stations.Keys)
+        foreach (var station in stations.Select(station => station.Id))
         {
             foreach (var months in (await MonthsOfAsync(station, ct)).Chunk(MonthsPerTransaction))
             {
@@ -68,26 +71,20 @@ public sealed class StoreMaintenance
     /// <summary>Reads everything and compares: sheets with their checksums and counts, revisions with each other, tiles with a recomputation.</summary>
     public async Task<VerifyReport> VerifyAsync(CancellationToken ct)
     {
-        var stations = await StationCodesAsync(ct);
+        var view = await network.GetAsync(ct);
         var tally = new VerifyTally();
-        foreach (var (id, code) in stations)
+        foreach (var station in view.Stations)
         {
-            await StationVerifier.VerifyAsync(database, id, code, tally, ct);
+            await StationVerifier.VerifyAsync(database, station, view.Plan, tally, ct);
         }
 
-        return new(stations.Count, tally.Sheets, tally.Revisions, tally.Tiles, tally.Faults);
+        return new(view.Stations.Count, tally.Sheets, tally.Revisions, tally.Tiles, tally.Faults);
     }
 
     /// <summary>Copies the embedded store as it is at one moment to a new file, which is opened and checked before it gets its name.</summary>
     public async Task<BackupOutcome> BackupAsync(string file, CancellationToken ct) => options.Provider is StoreProvider.Sqlite
         ? await SqliteFile.BackupAsync(database, Path.GetFullPath(file), ct)
         : new BackupOutcome.Refused("Only the embedded store is copied this way; PostgreSQL has pg_dump and pg_basebackup.");
-
-    private Task<SortedDictionary<int, string>> StationCodesAsync(CancellationToken ct) => database.ReadAsync(async session =>
-    {
-        await using var context = await session.ContextAsync(ct);
-        return new SortedDictionary<int, string>(await context.Stations.ToDictionaryAsync(row => row.Id, row => row.Code, ct));
-    }, ct);
 
     // Months with sheets, and months with tiles: the latter may have lost their sheets.
     private Task<List<int>> MonthsOfAsync(int station, CancellationToken ct) => database.SnapshotAsync(async session =>

@@ -60,5 +60,5 @@ public sealed class CopiedDayTests
         Assert.Contains("2026-06-01", Copy(receipts[0])!.Message, StringComparison.Ordinal);
     }
 
-    private static SheetWarning? Copy(DayReceipt receipt) => receipt.Warnings.SingleOrDefault(warning => warning.Rule is SheetRule.Copy);
+    private static SheetWarning? Copy(DayReceipt receipt) => receipt.Warnings.SingleOrDefault(warning => warning.Rule is SheetRule.CopiedDay);
 }
