@@ -1,0 +1,22 @@
+using Bandtide.Server.Security;
+
+namespace Bandtide.Server.Api;
+
+/// <summary>What several endpoints say of themselves.</summary>
+internal static class EndpointNotes
+{
+    /// <summary>Every status with which the endpoint may refuse; its answer is problem details.</summary>
+    public static RouteHandlerBuilder Refuses(this RouteHandlerBuilder endpoint, params ReadOnlySpan<int> statuses)
+    {
+        foreach (var status in statuses)
+        {
+            endpoint.Produces<ApiProblem>(status, Problems.ContentType);
+        }
+
+        return endpoint;
+    }
+
+    /// <summary>Requires a key: 401 without one, 403 when it is another's, 429 when it is used too fast.</summary>
+    public static RouteHandlerBuilder WithKey(this RouteHandlerBuilder endpoint) =>
+        endpoint.WithMetadata(NeedsKey.Instance).Refuses(401, 403, 429);
+}
