@@ -8,7 +8,7 @@ namespace Bandtide.Storage.Heatmaps;
 /// <param name="Heatmap">The cells.</param>
 /// <param name="Unit">Unit of the values: <c>1</c> for shares, <c>dB</c>, or the stations' level unit.</param>
 /// <param name="Stations">Stations of the selection with data in it.</param>
-/// <param name="StationDays">Station-days of the selection with data in it.</param>
+/// <param name="StationDays">Station-days of the best covered cell.</param>
 /// <param name="Revision">Opaque: changes whenever the answer could.</param>
 /// <param name="NotComparable">Why levels of these stations cannot be compared with each other, or <c>null</c> when they can.</param>
 /// <param name="Note">Why there is nothing, a meaningless season, fewer than three stations, or <c>null</c>.</param>

@@ -17,9 +17,13 @@ public sealed class NetworkStore
     internal NetworkStore(StoreDatabase database, TimeProvider clock) => (this.database, this.clock) = (database, clock);
 
     /// <summary>The network as it is now: from memory when its change counter has not moved.</summary>
-    public async Task<NetworkView> GetAsync(CancellationToken ct)
+    public async Task<NetworkView> GetAsync(CancellationToken ct) =>
+        await AtAsync(await database.ReadAsync(session => ChangeCounters.NetworkAsync(session, ct), ct), ct);
+
+    /// <summary>The network not older than a value that its change counter was seen at.</summary>
+    internal async Task<NetworkView> AtAsync(long version, CancellationToken ct)
     {
-        if (cached is { } view && view.Version == await database.ReadAsync(session => ChangeCounters.NetworkAsync(session, ct), ct))
+        if (cached is { } view && view.Version >= version)
         {
             return view;
         }
