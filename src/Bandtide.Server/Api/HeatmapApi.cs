@@ -1,8 +1,9 @@
 using System.Globalization;
 using System.Text;
 using Bandtide.Core.Heatmaps;
-
+using Bandtide.Server.Figures;
 using Bandtide.Storage.Heatmaps;
+using Bandtide.Storage.Network;
 
 namespace Bandtide.Server.Api;
 
@@ -18,7 +19,7 @@ internal static class HeatmapApi
             .WithSummary("Hour-by-band values pooled over stations and days, as numbers or as a picture")
             .Produces<HeatmapShape>(200, Json, Csv, Svg).Produces(304).Refuses(400, 404, 406);
 
-    private static async Task<IResult> GetAsync(HttpContext context, HeatmapReader reader, CancellationToken ct)
+    private static async Task<IResult> GetAsync(HttpContext context, HeatmapReader reader, NetworkStore network, CancellationToken ct)
     {
         context.Response.Headers.Vary = "Accept";
         var values = context.Request.Query;
@@ -44,11 +45,11 @@ internal static class HeatmapApi
             return Problems.NotAcceptable($"{Json}, {Csv} and {Svg}");
         }
 
-        return query is null || problems.Count > 0 ? Problems.Bad(problems) : await AnswerAsync(context, reader, query, revision!, type, ct);
+        return query is null || problems.Count > 0 ? Problems.Bad(problems) : await AnswerAsync(context, reader, network, query, revision!, type, ct);
     }
 
     private static async Task<IResult> AnswerAsync(
-        HttpContext context, HeatmapReader reader, HeatmapQuery query, string revision, string type, CancellationToken ct)
+        HttpContext context, HeatmapReader reader, NetworkStore network, HeatmapQuery query, string revision, string type, CancellationToken ct)
     {
         var text = HeatmapQueryText.ToQueryString(query);
         if (Tags.NotModified(context, Tags.Of(text, revision, type)))
@@ -68,7 +69,7 @@ internal static class HeatmapApi
                 return type switch
                 {
                     Csv => Results.Text(CsvOf(answer), "text/csv", Encoding.UTF8),
-                    Svg => Picture(context, answer),
+                    Svg => Picture(context, answer, await network.GetAsync(ct)),
                     _ => Results.Json(Shape(answer)),
                 };
             default:
@@ -76,10 +77,10 @@ internal static class HeatmapApi
         }
     }
 
-    private static IResult Picture(HttpContext context, HeatmapAnswer answer)
+    private static IResult Picture(HttpContext context, HeatmapAnswer answer, NetworkView network)
     {
         context.Response.Headers["Cross-Origin-Resource-Policy"] = "cross-origin";
-        return Results.Text("<svg xmlns=\"http://www.w3.org/2000/svg\"/>", Svg, Encoding.UTF8);
+        return Results.Text(HeatmapSvg.Render(HeatmapFigure.Of(answer, FigureWords.PlaceName(network, answer.Query))), Svg, Encoding.UTF8);
     }
 
     internal static HeatmapShape Shape(HeatmapAnswer answer)

@@ -28,8 +28,8 @@ internal static class ColourScale
     /// <summary>The colour's number for a place on the scale, 0 lowest to 1 highest; what lies outside is clamped.</summary>
     public static int Step(double place) => (int)Math.Round(Math.Clamp(place, 0, 1) * (Steps - 1), MidpointRounding.AwayFromZero);
 
-    /// <summary>Whether a mark on this colour has to be light on paper (and dark on a dark page).</summary>
-    public static bool IsHigh(int step) => step >= Steps * 2 / 5;
+    /// <summary>Whether a mark on this colour has to be light on paper and dark on a dark page; otherwise the other way round.</summary>
+    public static bool IsHigh(int step) => step >= 28;
 
     private static string Interpolate(double place)
     {

@@ -1,5 +1,6 @@
 using System.Globalization;
 using Bandtide.Server.Figures;
+using Bandtide.Testing;
 
 namespace Bandtide.Server.Tests.Figures;
 
@@ -45,11 +46,9 @@ public sealed class ColourScaleTests
     [Fact]
     public void Marks_on_any_colour_have_three_to_one_contrast() => Assert.All(Enumerable.Range(0, ColourScale.Steps), step =>
     {
-        var mark = ColourScale.IsHigh(step) ? Ink.Paper : Ink.Black;
-        var (a, b) = (Luminance(ColourScale.OnPaper[step], Sight["ordinary"]), Luminance(mark, Sight["ordinary"]));
-
         // WCAG 2.2, 1.4.11 non-text contrast.
-        Assert.True((Math.Max(a, b) + 0.05) / (Math.Min(a, b) + 0.05) >= 3, $"step {step}");
+        Assert.True(Contrast(ColourScale.OnPaper[step], ColourScale.IsHigh(step) ? Ink.Paper : Ink.Black) >= 3, $"step {step}");
+        Assert.True(Contrast(ColourScale.OnDark[step], ColourScale.IsHigh(step) ? Ink.Black : Ink.Paper) >= 3, $"step {step} on dark");
     });
 
     [Fact]
@@ -58,6 +57,12 @@ public sealed class ColourScaleTests
         var sheet = File.ReadAllText(Path.Combine(Repository.Root, "wwwroot", "css", "scale.css"));
         Assert.All(Enumerable.Range(0, ColourScale.Steps), step =>
             Assert.Contains($".s{step} {{ fill: {ColourScale.OnDark[step]}; }}", sheet, StringComparison.Ordinal));
+    }
+
+    private static double Contrast(string one, string other)
+    {
+        var (a, b) = (Luminance(one, Sight["ordinary"]), Luminance(other, Sight["ordinary"]));
+        return (Math.Max(a, b) + 0.05) / (Math.Min(a, b) + 0.05);
     }
 
     // CIE 1976 lightness of sRGB under D65.

@@ -45,7 +45,7 @@ public sealed class HeatmapSvgTests
 
         // Hour 1 has the lowest colour, no hatching and no dot; hour 2 a dot; the others neither.
         Assert.Equal(rows, Bricks(picture)[ColourScale.OnPaper[0]]);
-        var inCells = picture.Descendants(Svg + "g").Single(group => (string?)group.Attribute("class") == "fig-cells");
+        var inCells = ByClass(picture, "g", "fig-cells").Single();
         var dots = inCells.Elements(Svg + "circle").ToList();
         Assert.Equal(rows, dots.Count);
         Assert.All(dots, dot => Assert.Equal("10.417%", (string)dot.Attribute("cx")!));
@@ -86,7 +86,7 @@ public sealed class HeatmapSvgTests
         var picture = XDocument.Parse(HeatmapSvg.RenderInline(figure, "x")).Root!;
         var coloured = picture.Descendants()
             .Where(element => element.Attribute("fill") is { Value: not "none" } || element.Attribute("stroke") is not null)
-            .Where(element => element.Attribute("fill")?.Value.StartsWith("url(", StringComparison.Ordinal) != true);
+            .Where(element => element.Attribute("fill")?.Value.StartsWith("url(", StringComparison.Ordinal) is not true);
         Assert.All(coloured, element => Assert.NotNull(element.Attribute("class")));
     }
 
@@ -94,11 +94,10 @@ public sealed class HeatmapSvgTests
         XDocument.Parse(HeatmapSvg.Render(HeatmapFigure.Of(FigureSamples.Answer(query, cell), place))).Root!;
 
     private static IEnumerable<XElement> ByClass(XElement picture, string name, string kind) =>
-        picture.Descendants(Svg + name).Where(element => (string?)element.Attribute("class") == kind);
+        picture.Descendants(Svg + name).Where(element => string.Equals((string?)element.Attribute("class"), kind, StringComparison.Ordinal));
 
     // Number of cells by colour.
-    private static Dictionary<string, int> Bricks(XElement picture) => picture.Descendants(Svg + "g")
-        .Single(group => (string?)group.Attribute("class") == "fig-cells")
+    private static Dictionary<string, int> Bricks(XElement picture) => ByClass(picture, "g", "fig-cells").Single()
         .Descendants(Svg + "path")
         .ToDictionary(path => (string)path.Attribute("fill")!, path => ((string)path.Attribute("d")!).Count(c => c == 'M'));
 }
