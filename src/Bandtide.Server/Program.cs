@@ -30,8 +30,9 @@ app.MapSetupPage();
 
 await maintenance.MigrateAsync(app.Lifetime.ApplicationStopping);
 
+var link = await app.Services.GetRequiredService<FirstCoordinator>().PrepareAsync(app.Lifetime.ApplicationStopping);
 await app.StartAsync();
-await app.AnnounceAsync();
+app.Announce(link);
 await app.WaitForShutdownAsync();
 return 0;
 

@@ -32,17 +32,34 @@ internal static class ApiDescription
             };
             return Task.CompletedTask;
         });
-        options.AddOperationTransformer((operation, context, _) =>
+        options.AddOperationTransformer(async (operation, context, ct) =>
         {
             if (context.Description.ActionDescriptor.EndpointMetadata.OfType<NeedsKey>().Any())
             {
                 operation.Security = [new() { [new OpenApiSecuritySchemeReference(KeyScheme, context.Document)] = [] }];
             }
 
+            if (context.Description.ActionDescriptor.EndpointMetadata.OfType<BodyNote>().FirstOrDefault() is { } body)
+            {
+                operation.RequestBody = await BodyAsync(body, context, ct);
+            }
+
             AddParameters(operation);
             AddExamples(operation);
-            return Task.CompletedTask;
         });
+    }
+
+    private static async Task<OpenApiRequestBody> BodyAsync(BodyNote body, OpenApiOperationTransformerContext context, CancellationToken ct)
+    {
+        var shape = await context.GetOrCreateSchemaAsync(body.Shape, cancellationToken: ct);
+        return new()
+        {
+            Required = true,
+            Content = body.MediaTypes.ToDictionary(
+                type => type,
+                type => new OpenApiMediaType { Schema = type is "application/json" ? shape : new OpenApiSchema { Type = JsonSchemaType.String } },
+                StringComparer.Ordinal),
+        };
     }
 
     private static void AddParameters(OpenApiOperation operation)

@@ -16,7 +16,7 @@ internal static class BulkApi
         routes.MapPost("/stations/{code}/days", PostAsync).WithName("postDays").WithTags("Days")
             .WithSummary("Store many days: CSV with a date column, or NDJSON of day sheets; one line per day answers")
             .WithDescription("Atomic per day. The answer's lines come in the order of the body; a line that says created, replaced or unchanged is durable when it is sent. Sending all again is harmless.")
-            .Accepts<DaySheetShape>(Csv, Ndjson).Produces<ReceiptAnswer>(200, Ndjson).Refuses(400, 404, 406, 415).WithKey();
+            .TakesBody<DaySheetShape>(Csv, Ndjson).Produces<ReceiptAnswer>(200, Ndjson).Refuses(400, 404, 406, 415).WithKey();
 
     private static async Task<IResult> PostAsync(
         HttpContext context, string code, NetworkStore network, DayStore days, TimeProvider clock, CancellationToken ct, string? restore = null)

@@ -32,7 +32,7 @@ internal sealed class BulkUpload(
                 pending ??= body.ReadAsync(chunk, ct).AsTask();
                 if (!await ArrivesAsync(pending, ct))
                 {
-                    await CommitAsync(ct);
+                    await CommitAsync();
                     continue;
                 }
 
@@ -45,10 +45,10 @@ internal sealed class BulkUpload(
                 }
 
                 reader.Feed(chunk.AsSpan(0, read), completed);
-                await TakeAsync(ct);
+                await TakeAsync();
             }
         }
-        catch (Exception e) when (e is InvalidDataException or IOException or BadHttpRequestException)
+        catch (Exception e) when (e is InvalidDataException or IOException or BadHttpRequestException or OperationCanceledException)
         {
             // The connection broke, or the compressed data did: every complete day is still stored.
         }
@@ -63,8 +63,8 @@ internal sealed class BulkUpload(
             return Problems.Bad(reader.HeaderProblems);
         }
 
-        await TakeAsync(ct);
-        await CommitAsync(ct);
+        await TakeAsync();
+        await CommitAsync();
         receipts.Begin();
         await DrainAsync(body, chunk, endedProperly, pending, ct);
         return null;
@@ -82,7 +82,7 @@ internal sealed class BulkUpload(
         return rest > TimeSpan.Zero && await Task.WhenAny(pending, Task.Delay(rest, clock, ct)) == pending;
     }
 
-    private async Task TakeAsync(CancellationToken ct)
+    private async Task TakeAsync()
     {
         foreach (var day in completed)
         {
@@ -95,18 +95,19 @@ internal sealed class BulkUpload(
             waitingBytes += day.Bytes;
             if (waiting.Count >= MostDays || waitingBytes >= MostBytes)
             {
-                await CommitAsync(ct);
+                await CommitAsync();
             }
         }
 
         completed.Clear();
         if (waiting.Count > 0 && clock.GetElapsedTime(waitingSince) >= LongestWait)
         {
-            await CommitAsync(ct);
+            await CommitAsync();
         }
     }
 
-    private async Task CommitAsync(CancellationToken ct)
+    // A client that has gone still sent these days whole: they are stored.
+    private async Task CommitAsync()
     {
         if (waiting.Count == 0)
         {
@@ -114,7 +115,7 @@ internal sealed class BulkUpload(
         }
 
         PendingDay[] good = [.. waiting.Where(day => day.Reading.Sheet is not null).Select(day => new PendingDay(day.Reading.Sheet!, day.Reading.Warnings))];
-        var stored = good.Length == 0 ? [] : await store.StoreAsync(station, good, restore, ct);
+        var stored = good.Length == 0 ? [] : await store.StoreAsync(station, good, restore, CancellationToken.None);
         var next = 0;
         foreach (var day in waiting)
         {

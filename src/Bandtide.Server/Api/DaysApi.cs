@@ -18,7 +18,7 @@ internal static class DaysApi
     public static void MapDays(this IEndpointRouteBuilder routes)
     {
         routes.MapPut("/stations/{code}/days/{date}", PutAsync).WithName("putDay").WithTags("Days").WithSummary("Store one day; sending it again replaces it")
-            .Accepts<DaySheetShape>(Json, Csv).Produces<ReceiptAnswer>(201).Produces<ReceiptAnswer>().Refuses(400, 404, 406, 413, 415).WithKey();
+            .TakesBody<DaySheetShape>(Json, Csv).Produces<ReceiptAnswer>(201).Produces<ReceiptAnswer>().Refuses(400, 404, 406, 413, 415).WithKey();
         routes.MapGet("/stations/{code}/days/{date}", GetAsync).WithName("getDay").WithTags("Days").WithSummary("Read a day back, now or as it was")
             .Produces<DaySheetShape>(200, Json, Csv).Refuses(400, 404, 406, 410);
         routes.MapDelete("/stations/{code}/days/{date}", WithdrawAsync).WithName("withdrawDay").WithTags("Days").WithSummary("Withdraw a day; its revisions stay readable")

@@ -16,6 +16,10 @@ internal static class EndpointNotes
         return endpoint;
     }
 
+    /// <summary>Describes the body. Unlike the framework's own note it does not judge the request: the contract's order of judgement does.</summary>
+    public static RouteHandlerBuilder TakesBody<T>(this RouteHandlerBuilder endpoint, params string[] mediaTypes) =>
+        endpoint.WithMetadata(new BodyNote(typeof(T), mediaTypes));
+
     /// <summary>Requires a key: 401 without one, 403 when it is another's, 429 when it is used too fast.</summary>
     public static RouteHandlerBuilder WithKey(this RouteHandlerBuilder endpoint) =>
         endpoint.WithMetadata(NeedsKey.Instance).Refuses(401, 403, 429);

@@ -13,7 +13,7 @@ internal static class RegionsApi
         routes.MapGet("/regions/{code}", GetAsync).WithName("getRegion").WithTags("Regions").WithSummary("One region")
             .Produces<RegionAnswer>().Refuses(400, 404);
         routes.MapPost("/regions", CreateAsync).WithName("createRegion").WithTags("Regions").WithSummary("Draw up a region (coordinator)")
-            .Accepts<RegionRequest>("application/json").Produces<RegionAnswer>(201).Refuses(400, 406, 409, 413, 415).WithKey();
+            .TakesBody<RegionRequest>("application/json").Produces<RegionAnswer>(201).Refuses(400, 406, 409, 413, 415).WithKey();
     }
 
     private static async Task<IResult> ListAsync(NetworkStore network, CancellationToken ct) =>

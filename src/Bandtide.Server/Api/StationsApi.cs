@@ -16,9 +16,9 @@ internal static class StationsApi
         routes.MapGet("/stations/{code}", GetAsync).WithName("getStation").WithTags("Stations").WithSummary("One station with its setups")
             .Produces<StationAnswer>().Refuses(400, 404);
         routes.MapPost("/stations", CreateAsync).WithName("createStation").WithTags("Stations").WithSummary("Register a station (coordinator)")
-            .Accepts<StationRequest>("application/json").Produces<StationWithKey>(201).Refuses(400, 406, 409, 413, 415).WithKey();
+            .TakesBody<StationRequest>("application/json").Produces<StationWithKey>(201).Refuses(400, 406, 409, 413, 415).WithKey();
         routes.MapPost("/stations/{code}/setups", AddSetupAsync).WithName("addSetup").WithTags("Stations").WithSummary("Tell a setup, valid from a date")
-            .Accepts<SetupShape>("application/json").Produces<SetupShape>(201).Refuses(400, 404, 406, 413, 415).WithKey();
+            .TakesBody<SetupShape>("application/json").Produces<SetupShape>(201).Refuses(400, 404, 406, 413, 415).WithKey();
     }
 
     internal static StationAnswer Answer(Station station, NetworkView network) => new(

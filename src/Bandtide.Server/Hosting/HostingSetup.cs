@@ -27,11 +27,11 @@ internal static class HostingSetup
     }
 
     /// <summary>Says where the server is and, on a first start, how the first coordinator comes in.</summary>
-    public static async Task AnnounceAsync(this WebApplication app)
+    public static void Announce(this WebApplication app, string? link)
     {
         var url = app.Urls.FirstOrDefault() ?? DefaultUrl;
         Console.WriteLine($"Bandtide is at {url}");
-        if (await app.Services.GetRequiredService<FirstCoordinator>().PrepareAsync(app.Lifetime.ApplicationStopping) is { } link)
+        if (link is not null)
         {
             Console.WriteLine($"There is no coordinator yet. This link works once: {url}{link}");
         }

@@ -75,23 +75,26 @@ public sealed class BulkTests
         await using var server = await ServerHost.StartAsync(StoreKind.Sqlite);
         await server.AddStationAsync("north");
         var body = await File.ReadAllTextAsync(MeasuredData.Tokyo, Ct);
+        var acknowledged = new List<string>();
         using (var client = new TcpClient())
         {
             await client.ConnectAsync(IPAddress.Loopback, server.Address.Port, Ct);
             var bytes = Encoding.ASCII.GetBytes(Head(body.Length) + body);
             await client.GetStream().WriteAsync(bytes.AsMemory(0, (int)(bytes.Length * share)), Ct);
-        }
-
-        using var station = server.Client(ServerHost.CoordinatorKey);
-        JsonArray listed = [];
-        for (var wait = 0; wait < 50 && listed.Count < (int)(10 * share) - 1; wait++)
-        {
-            await Task.Delay(100, Ct);
-            listed = (await (await station.GetAsync("stations/north/days", null)).JsonAsync()).AsArray();
+            using var reader = new StreamReader(client.GetStream());
+            while (acknowledged.Count < (int)(10 * share) - 1 && await reader.ReadLineAsync(Ct) is { } line)
+            {
+                if (line.StartsWith('{'))
+                {
+                    acknowledged.Add(JsonNode.Parse(line)!["date"]!.GetValue<string>());
+                }
+            }
         }
 
         await Task.Delay(300, Ct);
-        listed = (await (await station.GetAsync("stations/north/days", null)).JsonAsync()).AsArray();
+        using var station = server.Client(ServerHost.CoordinatorKey);
+        var listed = (await (await station.GetAsync("stations/north/days", null)).JsonAsync()).AsArray();
+        Assert.Superset(acknowledged.ToHashSet(StringComparer.Ordinal), listed.Select(day => day!["date"]!.GetValue<string>()).ToHashSet(StringComparer.Ordinal));
         Assert.InRange(listed.Count, (int)(10 * share) - 1, 9);
         Assert.All(listed, day => Assert.Equal(24, day!["cells"]!.GetValue<int>()));
         Assert.Empty((await server.Store.Maintenance.VerifyAsync(Ct)).Faults);
