@@ -36,18 +36,21 @@ internal sealed class CellQuantiles(int cells)
             return double.NaN;
         }
 
-        list.Sort(static (a, b) => a.Value.CompareTo(b.Value));
         var neighbours = unit == VoteUnit.Square
             ? list.Select(entry => entry.Station).Distinct().CountBy(station => stations[station].Square, StringComparer.Ordinal).ToDictionary(StringComparer.Ordinal)
             : null;
+
+        // Among equal values the lighter come first, so that the result does not depend on the order of stations.
+        list.Sort((a, b) => a.Value != b.Value ? a.Value.CompareTo(b.Value) : Weight(a.Station).CompareTo(Weight(b.Station)));
         var (sorted, weights) = (new double[list.Count], new double[list.Count]);
         for (var i = 0; i < sorted.Length; i++)
         {
-            var (square, days) = stations[list[i].Station];
             sorted[i] = list[i].Value * resolution;
-            weights[i] = 1.0 / days[cell] / (neighbours?[square] ?? 1);
+            weights[i] = Weight(list[i].Station);
         }
 
         return WeightedQuantiles.Of(probability, sorted, weights);
+
+        double Weight(int station) => 1.0 / stations[station].Days[cell] / (neighbours?[stations[station].Square] ?? 1);
     }
 }
