@@ -3,11 +3,15 @@ namespace Bandtide.Server.Security;
 /// <summary>Response headers that keep a page to its own scripts and its own host.</summary>
 internal static class SecurityHeaders
 {
-    // The hash is that of the empty style element that the plotting script adds.
     private static readonly System.Text.CompositeFormat Policy = System.Text.CompositeFormat.Parse(
-        "default-src 'self'; script-src 'self' 'nonce-{0}'; style-src-elem 'self' 'sha256-47DEQpj8HBSa+/TImW+5JCeuQeRkm5NMpJWZG3hSuFU='; "
-        + "style-src-attr 'unsafe-inline'; img-src 'self' data: blob:; connect-src 'self'; base-uri 'self'; object-src 'none'; "
-        + "form-action 'self'; frame-ancestors 'none'");
+        "default-src 'self'; script-src 'self' 'nonce-{0}'; {1}style-src-attr 'unsafe-inline'; img-src 'self' data: blob:; "
+        + "connect-src 'self'; base-uri 'self'; object-src 'none'; form-action 'self'; frame-ancestors 'none'");
+
+    // The API reference's script writes its own style elements.
+    private const string OwnStyles = "style-src-elem 'self' 'unsafe-inline'; ";
+
+    // The hash is that of the empty style element that the plotting script adds.
+    private const string StrictStyles = "style-src-elem 'self' 'sha256-47DEQpj8HBSa+/TImW+5JCeuQeRkm5NMpJWZG3hSuFU='; ";
 
     public static IApplicationBuilder UseSecurityHeaders(this IApplicationBuilder app) => app.Use((context, next) =>
     {
@@ -16,7 +20,8 @@ internal static class SecurityHeaders
         headers["Referrer-Policy"] = "same-origin";
         headers["Permissions-Policy"] = "geolocation=(), camera=(), microphone=()";
         headers.ContentSecurityPolicy = string.Format(
-            System.Globalization.CultureInfo.InvariantCulture, Policy, context.RequestServices.GetRequiredService<ScriptNonce>().Value);
+            System.Globalization.CultureInfo.InvariantCulture, Policy, context.RequestServices.GetRequiredService<ScriptNonce>().Value,
+            context.Request.Path.StartsWithSegments("/reference", StringComparison.Ordinal) ? OwnStyles : StrictStyles);
         return next();
     });
 }
