@@ -1,4 +1,5 @@
 using Bandtide.Server.Api;
+using Bandtide.Server.Components;
 using Bandtide.Server.Hosting;
 using Bandtide.Server.Security;
 using Bandtide.Storage;
@@ -12,6 +13,7 @@ var store = StoreSettings.Read(builder.Configuration);
 builder.Services.AddBandtideStorage(store);
 builder.Services.AddHosting(store.DataDirectory);
 builder.Services.AddApi();
+builder.Services.AddPages();
 
 await using var app = builder.Build();
 var maintenance = app.Services.GetRequiredService<StoreMaintenance>();
@@ -22,11 +24,13 @@ if (StoreCommands.Of(args) is not null)
 
 app.UseExceptionHandler();
 app.UseSecurityHeaders();
+app.UsePages();
 app.UseRouting();
 app.UseApi();
 app.UseAntiforgery();
 app.MapApi();
 app.MapSetupPage();
+app.MapPages();
 
 await maintenance.MigrateAsync(app.Lifetime.ApplicationStopping);
 

@@ -11,7 +11,7 @@ namespace Bandtide.Server.Figures;
 /// <param name="RiseHour">Sunrise of the one station and month shown, hours, or <c>null</c>.</param>
 /// <param name="SetHour">Sunset likewise.</param>
 /// <param name="Sentence">What the strip shows.</param>
-internal sealed record Daylight(IReadOnlyList<double> Shares, double? RiseHour, double? SetHour, string Sentence)
+public sealed record Daylight(IReadOnlyList<double> Shares, double? RiseHour, double? SetHour, string Sentence)
 {
     private const int QuartersPerDay = 96;
 

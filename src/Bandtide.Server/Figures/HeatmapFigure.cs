@@ -12,7 +12,7 @@ namespace Bandtide.Server.Figures;
 /// <param name="Scale">Colours and words of the values.</param>
 /// <param name="ScaleTitle">Name of the colour scale with its unit.</param>
 /// <param name="Daylight">The strip above the columns, or <c>null</c>.</param>
-internal sealed record HeatmapFigure(
+public sealed record HeatmapFigure(
     string Title,
     string Subtitle,
     IReadOnlyList<string> Caption,

@@ -4,7 +4,7 @@ namespace Bandtide.Server.Figures;
 internal static class HeatmapGeometry
 {
     /// <summary>Width of the row labels with the gap beside them, on paper and wide pages.</summary>
-    public const int LabelWidth = 268;
+    public const int LabelWidth = 306;
 
     /// <summary>Gap between row labels and cells.</summary>
     public const int LabelGap = 10;

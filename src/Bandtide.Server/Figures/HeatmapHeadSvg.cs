@@ -34,9 +34,8 @@ internal static class HeatmapHeadSvg
         foreach (var hour in SunHours(figure.Daylight))
         {
             var x = HeatmapSvg.Percent(hour);
-            var top = StripTop + StripHeight - HeatmapGeometry.Head;
             svg.Add($"""<line class="fig-halo" x1="{x}%" x2="{x}%" y1="0" y2="{height}" stroke="{Ink.Paper}" stroke-width="3.5"/>""");
-            svg.Add($"""<line class="fig-sun" x1="{x}%" x2="{x}%" y1="{top}" y2="{height}" stroke="{Ink.Second}" stroke-width="1.5"/>""");
+            svg.Add($"""<line class="fig-sun" x1="{x}%" x2="{x}%" y1="0" y2="{height}" stroke="{Ink.Second}" stroke-width="1.5"/>""");
         }
     }
 

@@ -10,13 +10,14 @@ internal static class HeatmapLegendSvg
 
     /// <summary>Writes the legend.</summary>
     /// <param name="svg">Where to.</param>
-    /// <param name="figure">The figure.</param>
+    /// <param name="scale">The scale.</param>
+    /// <param name="title">Its name with the unit.</param>
     /// <param name="top">Lower edge of the cells.</param>
     /// <param name="hatch">Identity of the hatching.</param>
-    public static void Write(SvgWriter svg, HeatmapFigure figure, int top, string hatch)
+    public static void Write(SvgWriter svg, ValueScale scale, string title, int top, string hatch)
     {
         svg.Add($"""<g class="fig-legend" transform="translate(0,{top})">""");
-        WriteScale(svg, figure.Scale, figure.ScaleTitle);
+        WriteScale(svg, scale, title);
         svg.Add($"""<g class="fig-marks" transform="translate({MarksLeft},0)">""");
         svg.Add($"""<rect x="0.5" y="{BarTop - 3.5}" width="26" height="16" fill="url(#{hatch})"/><text x="34" y="{BarTop + 9}">not observed</text>""");
         var pale = ColourScale.Step(0.3);
@@ -24,8 +25,7 @@ internal static class HeatmapLegendSvg
         svg.AddRaw("</g></g>");
     }
 
-    /// <summary>Writes the colour bar with its ticks and title, 58 pixels high.</summary>
-    public static void WriteScale(SvgWriter svg, ValueScale scale, string title)
+    private static void WriteScale(SvgWriter svg, ValueScale scale, string title)
     {
         svg.Add($"""<text class="fig-soft" y="{BarTop - 6}" fill="{Ink.Grey}">{title}</text>""");
         for (var step = 0; step < ColourScale.Steps; step++)

@@ -1,4 +1,3 @@
-using System.Globalization;
 using System.Text;
 
 namespace Bandtide.Server.Figures;
@@ -30,7 +29,7 @@ internal static class HeatmapSvg
         if (figure.Rows.Count > 0)
         {
             svg.Add($"""<g transform="translate({Margin},{TitleHeight})">""");
-            Body(svg, figure, "alone");
+            Body(svg, figure, "hatch-alone");
             svg.AddRaw("</g>");
         }
 
@@ -42,41 +41,57 @@ internal static class HeatmapSvg
         return svg.AddRaw("</svg>").ToString();
     }
 
-    /// <summary>The picture inside a page, whose style sheet gives width and colours; title and caption are the page's.</summary>
+    /// <summary>
+    /// The picture inside a page, whose style sheet gives width and colours: row labels, cells and legend as three SVGs side by
+    /// side, since only the cells follow the page's width. Title and caption are the page's.
+    /// </summary>
     /// <param name="figure">The description, with at least one row.</param>
     /// <param name="id">Identity on the page: letters and digits.</param>
     public static string RenderInline(HeatmapFigure figure, string id)
     {
         ArgumentNullException.ThrowIfNull(figure);
-        var height = HeatmapGeometry.Height(figure);
+        var height = HeatmapGeometry.Head + HeatmapGeometry.PlotHeight(figure);
         var svg = new SvgWriter();
-        svg.Add($"""<svg xmlns="http://www.w3.org/2000/svg" class="fig" role="img" aria-label="{figure.Title}: {figure.Subtitle}" width="{HeatmapGeometry.Width}" height="{height}" font-size="12">""");
-        Body(svg, figure, id);
+        svg.Add($"""<div class="fig-pair" role="img" aria-label="{figure.Title}: {figure.Subtitle}">""");
+        svg.Add($"""<svg class="fig fig-labels" aria-hidden="true" width="{HeatmapGeometry.LabelWidth - HeatmapGeometry.LabelGap}" height="{height}" font-size="12">""");
+        Labels(svg, figure);
+        svg.Add($"""</svg><svg class="fig fig-plot" aria-hidden="true" width="{HeatmapGeometry.PlotWidth}" height="{height}" font-size="12">""");
+        svg.AddRaw(HatchPattern($"hatch-{id}"));
+        Plot(svg, figure, $"hatch-{id}");
+        svg.Add($"""</svg></div><svg class="fig fig-foot" aria-hidden="true" width="{HeatmapGeometry.Width}" height="{HeatmapGeometry.Foot}" font-size="12">""");
+        HeatmapLegendSvg.Write(svg, figure.Scale, figure.ScaleTitle, 0, $"hatch-{id}");
         return svg.AddRaw("</svg>").ToString();
     }
 
-    private static void Body(SvgWriter svg, HeatmapFigure figure, string id)
+    private static void Body(SvgWriter svg, HeatmapFigure figure, string hatch)
     {
         var (plot, height) = (HeatmapGeometry.PlotHeight(figure), HeatmapGeometry.Height(figure));
-        svg.AddRaw(HatchPattern($"hatch-{id}"));
-        Labels(svg, figure, height);
-        svg.Add($"""<svg class="fig-plot" x="{HeatmapGeometry.LabelWidth}" width="{HeatmapGeometry.PlotWidth}" height="{height}" overflow="visible">""");
+        svg.AddRaw(HatchPattern(hatch));
+        svg.Add($"""<svg width="{HeatmapGeometry.LabelWidth - HeatmapGeometry.LabelGap}" height="{height}" overflow="visible">""");
+        Labels(svg, figure);
+        svg.Add($"""</svg><svg x="{HeatmapGeometry.LabelWidth}" width="{HeatmapGeometry.PlotWidth}" height="{height}" overflow="visible">""");
+        Plot(svg, figure, hatch);
+        svg.AddRaw("</svg>");
+        HeatmapLegendSvg.Write(svg, figure.Scale, figure.ScaleTitle, HeatmapGeometry.Head + plot, hatch);
+    }
+
+    // Hours, daylight, cells and sun lines, as wide as the space they are in.
+    private static void Plot(SvgWriter svg, HeatmapFigure figure, string hatch)
+    {
+        var plot = HeatmapGeometry.PlotHeight(figure);
         HeatmapHeadSvg.Write(svg, figure);
         svg.Add($"""<svg y="{HeatmapGeometry.Head}" width="100%" height="{plot}" overflow="visible">""");
-        Unobserved(svg, figure, $"hatch-{id}");
-        Cells(svg, figure);
+        HeatmapCellsSvg.Write(svg, figure.Rows, figure.Scale, CellSize.Large, hatch);
         HeatmapHeadSvg.WriteSunLines(svg, figure, plot);
-        svg.AddRaw("</svg></svg>");
-        HeatmapLegendSvg.Write(svg, figure, HeatmapGeometry.Head + plot, $"hatch-{id}");
+        svg.AddRaw("</svg>");
     }
 
     /// <summary>The hatching of what nobody observed.</summary>
     internal static string HatchPattern(string id) => new SvgWriter().Add(
         $"""<defs><pattern id="{id}" width="5" height="5" patternUnits="userSpaceOnUse" patternTransform="rotate(45)"><path class="fig-hatch" d="M.5 0v5" stroke="{Ink.Hatch}" stroke-width="1"/></pattern></defs>""").ToString();
 
-    private static void Labels(SvgWriter svg, HeatmapFigure figure, int height)
+    private static void Labels(SvgWriter svg, HeatmapFigure figure)
     {
-        svg.Add($"""<svg class="fig-labels" width="{HeatmapGeometry.LabelWidth - HeatmapGeometry.LabelGap}" height="{height}" overflow="visible">""");
         if (figure.Daylight is not null)
         {
             svg.Add($"""<text class="fig-soft" x="100%" y="32" text-anchor="end" fill="{Ink.Grey}">Daylight</text>""");
@@ -88,73 +103,6 @@ internal static class HeatmapSvg
             var y = HeatmapGeometry.Head + index * HeatmapGeometry.RowHeight + 14;
             svg.Add($"""<text class="fig-name" y="{y}">{row.Band.Name}</text><text class="fig-khz" x="100%" y="{y}" text-anchor="end">{row.Band.ShortLabel}</text>""");
         }
-
-        svg.AddRaw("</svg>");
-    }
-
-    private static void Unobserved(SvgWriter svg, HeatmapFigure figure, string hatch)
-    {
-        foreach (var (row, index) in figure.Rows.Select((row, index) => (row, index)))
-        {
-            for (var hour = 0; hour < 24; hour++)
-            {
-                var from = hour;
-                while (hour < 24 && row.Cells[hour].State() == CellState.NotObserved)
-                {
-                    hour++;
-                }
-
-                if (hour > from)
-                {
-                    svg.Add($"""<rect class="fig-unobserved" x="{Percent(from)}%" y="{index * HeatmapGeometry.RowHeight}" width="{Percent(hour - from)}%" height="{HeatmapGeometry.RowHeight - HeatmapGeometry.RowGap}" fill="url(#{hatch})"/>""");
-                }
-            }
-        }
-    }
-
-    // One path per colour keeps a picture of eight hundred cells near 20 kB.
-    private static void Cells(SvgWriter svg, HeatmapFigure figure)
-    {
-        var paths = new SortedDictionary<int, StringBuilder>();
-        var dots = new SvgWriter();
-        foreach (var (row, index) in figure.Rows.Select((row, index) => (row, index)))
-        {
-            for (var hour = 0; hour < 24; hour++)
-            {
-                var cell = row.Cells[hour];
-                var step = double.IsNaN(cell.Value) ? -1 : ColourScale.Step(figure.Scale.Place(cell.Value));
-                if (step >= 0)
-                {
-                    Brick(paths, step, hour, index);
-                }
-
-                if (cell.State() == CellState.FewData)
-                {
-                    var (mark, fill) = ColourScale.IsHigh(step) ? ("fig-dot-high", Ink.Paper) : ("fig-dot-low", Ink.Black);
-                    dots.Add($"""<circle class="{mark}" cx="{Percent(hour + 0.5)}%" cy="{index * HeatmapGeometry.RowHeight + 9.5}" r="2.2" fill="{fill}"/>""");
-                }
-            }
-        }
-
-        svg.Add($"""<g class="fig-cells"><svg viewBox="0 0 {HeatmapGeometry.PlotWidth} {HeatmapGeometry.PlotHeight(figure)}" width="100%" height="100%" preserveAspectRatio="none" shape-rendering="crispEdges">""");
-        foreach (var (step, path) in paths)
-        {
-            svg.Add($"""<path class="s{step}" fill="{ColourScale.OnPaper[step]}" d="{path}"/>""");
-        }
-
-        svg.AddRaw("</svg>").AddRaw(dots.ToString()).AddRaw("</g>");
-    }
-
-    private static void Brick(SortedDictionary<int, StringBuilder> paths, int step, int hour, int row)
-    {
-        if (!paths.TryGetValue(step, out var path))
-        {
-            paths.Add(step, path = new());
-        }
-
-        path.Append(
-            CultureInfo.InvariantCulture,
-            $"M{hour * HeatmapGeometry.ColumnWidth} {row * HeatmapGeometry.RowHeight}h{HeatmapGeometry.ColumnWidth}v{HeatmapGeometry.RowHeight - HeatmapGeometry.RowGap}h-{HeatmapGeometry.ColumnWidth}z");
     }
 
     /// <summary>Hours as per cent of the cells' width.</summary>

@@ -7,7 +7,7 @@ namespace Bandtide.Server.Figures;
 /// <param name="Ticks">Ascending values, the first and last being the ends of the scale.</param>
 /// <param name="IsShare">Whether values are shares of one, which people read in per cent.</param>
 /// <param name="Unit">Unit of what <see cref="Number"/> writes: <c>%</c>, <c>dB</c> or the stations' level unit.</param>
-internal sealed record ValueScale(IReadOnlyList<double> Ticks, bool IsShare, string Unit)
+public sealed record ValueScale(IReadOnlyList<double> Ticks, bool IsShare, string Unit)
 {
     private const int MostIntervals = 6;
 

@@ -83,7 +83,7 @@ public sealed class HeatmapSvgTests
     public void Every_colour_of_a_page_picture_can_be_themed_by_its_class()
     {
         var figure = HeatmapFigure.Of(FigureSamples.Answer(FigureSamples.StationMonth, FigureSamples.Plausible), "Helsinki");
-        var picture = XDocument.Parse(HeatmapSvg.RenderInline(figure, "x")).Root!;
+        var picture = XDocument.Parse($"<page>{HeatmapSvg.RenderInline(figure, "x")}</page>").Root!;
         var coloured = picture.Descendants()
             .Where(element => element.Attribute("fill") is { Value: not "none" } || element.Attribute("stroke") is not null)
             .Where(element => element.Attribute("fill")?.Value.StartsWith("url(", StringComparison.Ordinal) is not true);
