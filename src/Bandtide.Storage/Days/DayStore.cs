@@ -31,21 +31,20 @@ public sealed class DayStore
         }
 
         // All that needs no lock comes before the transaction.
-        var plan = (await network.GetAsync(ct)).Plan;
+        var plan = (await network.LatestAsync(ct)).Plan;
         var upload = new DayUpload(station, days, restoreWithdrawn, plan, clock.GetUtcNow());
         var (decisions, copies) = await database.WriteAsync(async session =>
         {
             var writer = new DayWriter(session, station.Id);
-            await writer.LockAsync(ct);
-            var decided = upload.Decide(await writer.HeadsAsync(upload.Dates, ct));
-            var earliest = await writer.EarliestCopiesAsync(upload.Checksums, upload.Dates, ct);
+            var state = await writer.LockAsync(upload.Dates, upload.Checksums, ct);
+            var decided = upload.Decide(state.Heads);
             var changes = upload.ChangesOf(decided);
             if (changes.Count > 0)
             {
                 await writer.ApplyAsync(changes, ct);
             }
 
-            return ((decided, earliest), changes.Count > 0);
+            return ((decided, state.EarliestCopies), changes.Count > 0);
         }, ct);
 
         return upload.Receipts(decisions, copies);
@@ -67,8 +66,7 @@ public sealed class DayStore
         return await database.WriteAsync<bool?>(async session =>
         {
             var writer = new DayWriter(session, station.Id);
-            await writer.LockAsync(ct);
-            if (!(await writer.HeadsAsync([day], ct)).TryGetValue(day, out var head))
+            if (!(await writer.LockAsync([day], [], ct)).Heads.TryGetValue(day, out var head))
             {
                 return (null, false);
             }

@@ -34,7 +34,7 @@ internal sealed class DayUpload
     public IReadOnlyCollection<byte[]> Checksums => [.. sheets.Select(sheet => sheet.Checksum)];
 
     /// <summary>What storing does to each day, and the revision that is current afterwards.</summary>
-    public IReadOnlyList<(DayStatus Status, int Revision)> Decide(Dictionary<int, DayHead> heads) =>
+    public IReadOnlyList<(DayStatus Status, int Revision)> Decide(IReadOnlyDictionary<int, DayHead> heads) =>
         [.. dates.Select((date, i) => heads.GetValueOrDefault(date) switch
         {
             null => (DayStatus.Created, 1),
@@ -54,7 +54,7 @@ internal sealed class DayUpload
     /// <summary>The receipts, in the order of the days.</summary>
     /// <param name="decisions">What storing did.</param>
     /// <param name="stored">The earliest other date with each checksum, by checksum text.</param>
-    public IReadOnlyList<DayReceipt> Receipts(IReadOnlyList<(DayStatus Status, int Revision)> decisions, Dictionary<string, int> stored)
+    public IReadOnlyList<DayReceipt> Receipts(IReadOnlyList<(DayStatus Status, int Revision)> decisions, IReadOnlyDictionary<string, int> stored)
     {
         var earliest = new Dictionary<string, int>(stored, StringComparer.Ordinal);
         for (var i = 0; i < dates.Length; i++)

@@ -35,14 +35,14 @@ internal interface IStoreDialect
     /// <summary>A list of byte strings as one parameter.</summary>
     DbParameter Bytes(string name, IReadOnlyCollection<byte[]> values);
 
-    /// <summary>Locks a station's row until the transaction ends; false when there is no such station.</summary>
-    Task<bool> LockStationAsync(StoreSession session, int stationId, CancellationToken ct);
+    /// <summary>A query that locks a station's row (<c>@station</c>) until the transaction ends and gives a row if there is such a station.</summary>
+    string LockStation { get; }
 
-    /// <summary>Writes the current rows of days, whether or not the dates have one.</summary>
-    Task WriteDaysAsync(StoreSession session, int stationId, IReadOnlyList<DayEntry> days, CancellationToken ct);
+    /// <summary>Makes days current, keeping those they supersede, with the tiles and counters of their months.</summary>
+    Task WriteDaysAsync(StoreSession session, int stationId, IReadOnlyList<DayEntry> days, MonthTiles tiles, CancellationToken ct);
 
-    /// <summary>Writes tiles, whether or not they exist.</summary>
-    Task WriteTilesAsync(StoreSession session, int stationId, IReadOnlyList<PackedTile> tiles, CancellationToken ct);
+    /// <summary>Replaces all tiles of months and raises the months' counters.</summary>
+    Task WriteTilesAsync(StoreSession session, int stationId, MonthTiles tiles, CancellationToken ct);
 
     /// <summary>Raises the change counters of months, given in ascending order.</summary>
     Task RaiseCountersAsync(StoreSession session, IReadOnlyList<int> months, CancellationToken ct);

@@ -57,6 +57,9 @@ internal sealed class SqliteDialect(string file) : IStoreDialect, IDisposable
     public ValueTask<DbTransaction> BeginSnapshotAsync(DbConnection connection, CancellationToken ct) =>
         new(((SqliteConnection)connection).BeginTransaction(IsolationLevel.Serializable, deferred: true));
 
+    // The writing transaction holds the whole file already; what is left is to see whether the station exists.
+    public string LockStation => "SELECT 1 FROM station WHERE id = @station";
+
     public bool IsPassing(Exception exception) =>
         (exception is DbUpdateException { InnerException: { } cause } ? cause : exception)
             is SqliteException { SqliteErrorCode: SQLitePCL.raw.SQLITE_BUSY or SQLitePCL.raw.SQLITE_LOCKED };
@@ -71,39 +74,54 @@ internal sealed class SqliteDialect(string file) : IStoreDialect, IDisposable
     public DbParameter Bytes(string name, IReadOnlyCollection<byte[]> values) =>
         new SqliteParameter(name, $"[{string.Join(',', values.Select(value => $"\"{Convert.ToHexString(value)}\""))}]");
 
-    public async Task<bool> LockStationAsync(StoreSession session, int stationId, CancellationToken ct)
+    public async Task WriteDaysAsync(StoreSession session, int stationId, IReadOnlyList<DayEntry> days, MonthTiles tiles, CancellationToken ct)
     {
-        // The writing transaction holds the whole file already; what is left is to see whether the station exists.
-        await using var command = session.Command("SELECT 1 FROM station WHERE id = @station");
-        command.Parameters.Add(new SqliteParameter("@station", stationId));
-        return await command.ExecuteScalarAsync(ct) is not null;
+        await using (var keep = session.Command(DaySql.KeepSuperseded(this)))
+        {
+            keep.Add("@station", stationId);
+            keep.Parameters.Add(Numbers("@superseded", [.. days.Where(day => day.Revision > 1).Select(day => day.Date)]));
+            await keep.ExecuteNonQueryAsync(ct);
+        }
+
+        await EachAsync(
+            session,
+            """
+            INSERT INTO day_sheet (station_id, date, received_at, revision, cell_count, hours_mask, band_count, checksum, sheet)
+            VALUES (@station, @date, @received, @revision, @cells, @hours, @bands, @checksum, @sheet)
+            ON CONFLICT (station_id, date) DO UPDATE SET received_at = excluded.received_at, revision = excluded.revision,
+                cell_count = excluded.cell_count, hours_mask = excluded.hours_mask, band_count = excluded.band_count,
+                checksum = excluded.checksum, sheet = excluded.sheet
+            """,
+            ["@station", "@date", "@received", "@revision", "@cells", "@hours", "@bands", "@checksum", "@sheet"],
+            days,
+            day => [stationId, day.Date, day.ReceivedAt, day.Revision, day.Sheet?.CellCount ?? 0, day.Sheet?.HoursMask ?? 0,
+                day.Sheet?.BandCount ?? 0, day.Sheet?.Checksum, day.Sheet?.Bytes],
+            ct);
+        await WriteTilesAsync(session, stationId, tiles, ct);
     }
 
-    public Task WriteDaysAsync(StoreSession session, int stationId, IReadOnlyList<DayEntry> days, CancellationToken ct) => EachAsync(
-        session,
-        """
-        INSERT INTO day_sheet (station_id, date, received_at, revision, cell_count, hours_mask, band_count, checksum, sheet)
-        VALUES (@station, @date, @received, @revision, @cells, @hours, @bands, @checksum, @sheet)
-        ON CONFLICT (station_id, date) DO UPDATE SET received_at = excluded.received_at, revision = excluded.revision,
-            cell_count = excluded.cell_count, hours_mask = excluded.hours_mask, band_count = excluded.band_count,
-            checksum = excluded.checksum, sheet = excluded.sheet
-        """,
-        ["@station", "@date", "@received", "@revision", "@cells", "@hours", "@bands", "@checksum", "@sheet"],
-        days,
-        day => [stationId, day.Date, day.ReceivedAt, day.Revision, day.Sheet?.CellCount ?? 0, day.Sheet?.HoursMask ?? 0,
-            day.Sheet?.BandCount ?? 0, day.Sheet?.Checksum, day.Sheet?.Bytes],
-        ct);
+    public async Task WriteTilesAsync(StoreSession session, int stationId, MonthTiles tiles, CancellationToken ct)
+    {
+        await using (var delete = session.Command(DaySql.DeleteOtherTiles(this)))
+        {
+            delete.Add("@station", stationId);
+            delete.Parameters.Add(Numbers("@months", [.. tiles.Months]));
+            delete.Parameters.Add(Numbers("@kept", tiles.Keys));
+            await delete.ExecuteNonQueryAsync(ct);
+        }
 
-    public Task WriteTilesAsync(StoreSession session, int stationId, IReadOnlyList<PackedTile> tiles, CancellationToken ct) => EachAsync(
-        session,
-        """
-        INSERT INTO month_tile (station_id, month, measure, tile) VALUES (@station, @month, @measure, @tile)
-        ON CONFLICT (station_id, month, measure) DO UPDATE SET tile = excluded.tile
-        """,
-        ["@station", "@month", "@measure", "@tile"],
-        tiles,
-        tile => [stationId, tile.Month, (int)tile.Measure, tile.Bytes],
-        ct);
+        await EachAsync(
+            session,
+            """
+            INSERT INTO month_tile (station_id, month, measure, tile) VALUES (@station, @month, @measure, @tile)
+            ON CONFLICT (station_id, month, measure) DO UPDATE SET tile = excluded.tile
+            """,
+            ["@station", "@month", "@measure", "@tile"],
+            tiles.Tiles,
+            tile => [stationId, tile.Month, (int)tile.Measure, tile.Bytes],
+            ct);
+        await RaiseCountersAsync(session, tiles.Months, ct);
+    }
 
     public Task RaiseCountersAsync(StoreSession session, IReadOnlyList<int> months, CancellationToken ct) => EachAsync(
         session,

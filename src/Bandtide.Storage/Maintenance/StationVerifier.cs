@@ -133,7 +133,7 @@ internal sealed class StationVerifier
             return;
         }
 
-        foreach (var expected in TileWriter.TilesOf(month, [.. sheets.OfType<CellGrid>()]))
+        foreach (var expected in TileMaker.TilesOf(month, [.. sheets.OfType<CellGrid>()]))
         {
             tally.Tiles++;
             var place = YearMonth.FromNumber(month).ToString();

@@ -1,4 +1,6 @@
+using Bandtide.Core.Sheets;
 using Bandtide.Core.Time;
+using Bandtide.Storage.Days;
 using Bandtide.Storage.Engine;
 using Bandtide.Storage.Network;
 using Bandtide.Storage.Tiles;
@@ -53,12 +55,9 @@ public sealed class StoreMaintenance
             {
                 await database.WriteAsync(async session =>
                 {
-                    if (await session.Dialect.LockStationAsync(session, station, ct))
-                    {
-                        await new TileWriter(session, station).RecomputeAsync(months, new Dictionary<int, Core.Sheets.CellGrid?>(), ct);
-                        await session.Dialect.RaiseCountersAsync(session, months, ct);
-                    }
-
+                    await new DayWriter(session, station).LockAsync([], [], ct);
+                    var tiles = await TileMaker.MakeAsync(session, station, months, new Dictionary<int, CellGrid?>(), ct);
+                    await session.Dialect.WriteTilesAsync(session, station, tiles, ct);
                     return (months.Length, true);
                 }, ct);
                 count += months.Length;

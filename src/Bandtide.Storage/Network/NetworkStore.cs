@@ -20,6 +20,9 @@ public sealed class NetworkStore
     public async Task<NetworkView> GetAsync(CancellationToken ct) =>
         await AtAsync(await database.ReadAsync(session => ChangeCounters.NetworkAsync(session, ct), ct), ct);
 
+    /// <summary>The network as this process saw it last: enough for what was judged by such a view before.</summary>
+    internal async Task<NetworkView> LatestAsync(CancellationToken ct) => cached ?? await GetAsync(ct);
+
     /// <summary>The network not older than a value that its change counter was seen at.</summary>
     internal async Task<NetworkView> AtAsync(long version, CancellationToken ct)
     {

@@ -30,19 +30,19 @@ public static class SampleSheets
                 continue;
             }
 
-            // A smooth day with noise: 90 to 110 dB below the unit, busier where the level is higher.
+            // A smooth day with noise: a floor about -105, busier where the sun is up.
             var hour = cell / ids.Length;
-            var floor = -10_500 + (int)(300 * Math.Sin(hour / 24.0 * 2 * Math.PI)) + random.Next(-60, 60);
-            var occupancy = Math.Clamp((int)(3_000 + 3_000 * Math.Sin((hour - 4) / 24.0 * 2 * Math.PI)) + random.Next(-900, 900), 0, 10_000);
-            var level = floor + 100 + occupancy / 20 + random.Next(0, 50);
+            var floor = -10_500 + (int)(300 * Math.Sin(hour / 24.0 * 2 * Math.PI)) + random.Next(-30, 31);
+            var occupancy = Math.Clamp((int)(3_000 + 3_000 * Math.Sin((hour - 4) / 24.0 * 2 * Math.PI)) + random.Next(-300, 301), 0, 10_000);
+            var level = floor + 100 + occupancy / 40 + random.Next(0, 41);
             planes[(int)Quantity.Sweeps][cell] = random.Next(20) == 0 ? random.Next(300, 720) : 720;
             planes[(int)Quantity.Occupancy][cell] = occupancy;
             planes[(int)Quantity.Level][cell] = level;
-            planes[(int)Quantity.LevelP90][cell] = level + occupancy / 5 + random.Next(0, 200);
+            planes[(int)Quantity.LevelP90][cell] = level + occupancy / 10 + random.Next(0, 101);
             planes[(int)Quantity.Floor][cell] = floor;
             if (signal && occupancy > 0)
             {
-                planes[(int)Quantity.Signal][cell] = level + 500 + random.Next(0, 500);
+                planes[(int)Quantity.Signal][cell] = level + 500 + random.Next(0, 201);
             }
         }
 
