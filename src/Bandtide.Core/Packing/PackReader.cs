@@ -15,15 +15,37 @@ internal ref struct PackReader(ReadOnlySpan<byte> bytes)
 
     public int Int32() => BinaryPrimitives.ReadInt32LittleEndian(Take(4));
 
+    /// <summary>A number from 0 to 2^28 - 1, seven bits a byte.</summary>
+    /// <exception cref="PackException">No such number stands here.</exception>
+    public int Count()
+    {
+        var value = 0;
+        for (var shift = 0; shift < 28; shift += 7)
+        {
+            int part = Byte();
+            value |= (part & 0x7F) << shift;
+            if (part < 0x80)
+            {
+                return value;
+            }
+        }
+
+        throw new PackException("a count is too large");
+    }
+
     /// <exception cref="PackException">Fewer bytes are left.</exception>
-    public ReadOnlySpan<byte> Take(int count)
+    public ReadOnlySpan<byte> Take(int count) => TakeOpen(count)[..count];
+
+    /// <summary>Takes bytes and shows what follows them too: at least so many, for reads that look further than they use.</summary>
+    /// <exception cref="PackException">Fewer bytes are left.</exception>
+    public ReadOnlySpan<byte> TakeOpen(int count)
     {
         if ((uint)count > (uint)rest.Length)
         {
             throw new PackException("the bytes end too early");
         }
 
-        var taken = rest[..count];
+        var taken = rest;
         rest = rest[count..];
         return taken;
     }

@@ -19,6 +19,32 @@ internal sealed class PackWriter(int capacity = 1024)
 
     public void UInt32(uint value) => BinaryPrimitives.WriteUInt32LittleEndian(Reserve(4), value);
 
+    /// <summary>Writes a number from 0 to 2^28 - 1, seven bits a byte: small ones take one.</summary>
+    public void Count(int value)
+    {
+        ArgumentOutOfRangeException.ThrowIfGreaterThan((uint)value, (1u << 28) - 1, nameof(value));
+        for (; value >= 0x80; value >>= 7)
+        {
+            Byte(0x80 | (value & 0x7F));
+        }
+
+        Byte(value);
+    }
+
+    /// <summary>Writes what another writer holds, its length before it.</summary>
+    public void Section(PackWriter section)
+    {
+        Count(section.Length);
+        section.Written.CopyTo(Reserve(section.Length));
+    }
+
+    /// <summary>Begins anew in the same buffer.</summary>
+    public void Clear()
+    {
+        buffer.AsSpan(0, Length).Clear();
+        Length = 0;
+    }
+
     /// <summary>A run of bytes to fill, all zero at first.</summary>
     public Span<byte> Reserve(int count)
     {

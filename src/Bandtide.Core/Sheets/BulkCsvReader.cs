@@ -1,30 +1,31 @@
-using System.Text.Unicode;
 using Bandtide.Core.Time;
 
 namespace Bandtide.Core.Sheets;
 
 /// <summary>Many day sheets as one CSV body with a <c>date</c> column: consecutive rows of the same date text are one day.</summary>
+/// <remarks>
+/// A row whose quotes go wrong is split at its commas all the same, to find its date: it refuses its own day and no other. A
+/// row too short to reach its date belongs to the day being read, so that no day is kept without one of its rows.
+/// Empty lines are passed over.
+/// </remarks>
 public sealed class BulkCsvReader(SheetContext context) : IBulkReader
 {
+    private const int PieceBytes = 64 * 1024;
+
     private readonly PendingBytes pending = new();
+    private readonly CsvRecordFinder records = new();
     private readonly CsvRow row = new();
-    private readonly List<SheetProblem> headerProblems = [];
-    private readonly HashSet<DateOnly> dates = [];
+    private readonly ProblemList headerProblems = new();
+    private readonly BulkDates dates = new();
     private CsvHeader? header;
     private IReadOnlyList<SheetWarning> warnings = [];
+    private BulkCsvDay? day;
     private int line = 1;
-    private int count;
     private bool skipping;
     private bool first = true;
 
-    // The day being read.
-    private byte[]? dayText;
-    private DateOnly? date;
-    private SheetBuilder? day;
-    private int dayBytes;
-
     /// <inheritdoc/>
-    public IReadOnlyList<SheetProblem> HeaderProblems => headerProblems;
+    public IReadOnlyList<SheetProblem> HeaderProblems => headerProblems.Items;
 
     /// <inheritdoc/>
     public bool HeaderRead => header is not null || headerProblems.Count > 0;
@@ -36,22 +37,58 @@ public sealed class BulkCsvReader(SheetContext context) : IBulkReader
     public void Feed(ReadOnlySpan<byte> chunk, ICollection<BulkDay> completed)
     {
         ArgumentNullException.ThrowIfNull(completed);
-        if (Stopped)
+        while (!chunk.IsEmpty && !Stopped)
         {
-            return;
+            // In pieces, so that what is kept does not grow with the chunk.
+            var piece = chunk[..Math.Min(chunk.Length, PieceBytes)];
+            chunk = chunk[piece.Length..];
+            pending.Append(piece);
+            if (!first || pending.Unread.Length >= Utf8Mark.Length)
+            {
+                ReadRecords(completed);
+            }
+        }
+    }
+
+    /// <inheritdoc/>
+    public void Finish(bool endedProperly, ICollection<BulkDay> completed)
+    {
+        ArgumentNullException.ThrowIfNull(completed);
+        if (!Stopped && endedProperly)
+        {
+            ReadRecords(completed);
+            var rest = CsvRecordFinder.WithoutReturn(pending.Unread);
+            if (!Stopped && !rest.IsEmpty)
+            {
+                ReadRow(rest, isOpen: records.InsideQuotes, completed);
+            }
+
+            if (!HeaderRead)
+            {
+                headerProblems.Add(line, "", SheetRule.HeaderMissing, "The body is empty; it must begin with a header line.");
+            }
+
+            if (!Stopped)
+            {
+                EndDay(completed);
+            }
         }
 
-        pending.Append(chunk);
-        if (first && pending.Unread.Length >= 3)
+        Stopped = true;
+    }
+
+    private void ReadRecords(ICollection<BulkDay> completed)
+    {
+        if (first)
         {
-            pending.Skip(pending.Unread.Length - CsvRecords.WithoutMark(pending.Unread).Length);
             first = false;
+            pending.Skip(Utf8Mark.LengthIn(pending.Unread));
         }
 
-        while (!Stopped && !first)
+        while (!Stopped && (!skipping || SkipLine()))
         {
             var unread = pending.Unread;
-            var length = CsvRecords.Find(unread, out var lines, out var next, out _);
+            var length = records.Find(unread, out var next);
             if (length < 0)
             {
                 if (unread.Length > BulkLimits.MaxDayBytes)
@@ -62,228 +99,129 @@ public sealed class BulkCsvReader(SheetContext context) : IBulkReader
                 return;
             }
 
-            Record(unread[..length], lines, completed);
+            if (length > 0)
+            {
+                ReadRow(unread[..length], isOpen: false, completed);
+            }
+
+            line += 1 + records.InnerLines;
+            records.Reset();
             pending.Skip(next);
         }
     }
 
-    /// <inheritdoc/>
-    public void Finish(bool endedProperly, ICollection<BulkDay> completed)
+    // A record that holds the end of an open quote, or one that closes lines later in the wrong place, cannot be trusted
+    // about where it ends: reading stops there.
+    private void ReadRow(ReadOnlySpan<byte> record, bool isOpen, ICollection<BulkDay> completed)
     {
-        ArgumentNullException.ThrowIfNull(completed);
-        if (Stopped)
-        {
-            return;
-        }
-
-        if (!endedProperly)
-        {
-            Stopped = true;
-            return;
-        }
-
-        var rest = first ? CsvRecords.WithoutMark(pending.Unread) : pending.Unread;
-        var length = CsvRecords.Find(rest, out var lines, out var next, out var openQuote);
-        if (length >= 0)
-        {
-            Record(rest[..length], lines, completed);
-            rest = rest[next..];
-            CsvRecords.Find(rest, out lines, out _, out openQuote);
-        }
-
-        if (openQuote)
-        {
-            UnclosedQuote(rest, completed);
-        }
-        else if (!rest.IsEmpty && !Stopped)
-        {
-            Record(rest, lines, completed);
-        }
-
-        if (header is null && headerProblems.Count == 0)
-        {
-            headerProblems.Add(new(1, "", SheetRule.HeaderMissing, "The body is empty; it must begin with a header line."));
-        }
-
-        EndDay(completed);
-        Stopped = true;
-    }
-
-    private void Record(ReadOnlySpan<byte> record, int lines, ICollection<BulkDay> completed)
-    {
-        if (skipping)
-        {
-            skipping = false;
-        }
-        else if (!record.IsEmpty)
-        {
-            Row(record, completed);
-        }
-
-        line += lines;
-    }
-
-    private void Row(ReadOnlySpan<byte> record, ICollection<BulkDay> completed)
-    {
-        var valid = Utf8.IsValid(record);
-        var split = row.Split(record, out var text);
+        row.Split(record, out var text);
+        var isUnclosed = isOpen || (!row.IsWellFormed && records.InnerLines > 0);
         if (header is null)
         {
-            ReadHeader(valid && split, text);
-            return;
+            ReadHeader(text, isUnclosed);
         }
-
-        // A row that cannot be split still tells which day it belongs to, if its date can be found at all.
-        var place = header.Date < row.Count ? row.Fields[header.Date] : FieldSlice.Absent;
-        var dateText = place.Of(split ? text : record);
-        if (dayText is null || !dateText.SequenceEqual(dayText))
+        else if (EnterDay(record, text, completed))
         {
-            if (!split && day is not null)
+            if (isUnclosed)
             {
-                day.Add(line, "", SheetRule.QuoteSyntax, "A quote stands where RFC 4180 allows none.");
-                return;
+                day!.Problems.Add(line, "", SheetRule.QuoteUnclosed, "A quote opened on this line is not closed on it; nothing after it was read.");
+                EndDay(completed);
+                Stopped = true;
             }
-
-            EndDay(completed);
-            if (Stopped || !BeginDay(dateText, completed))
+            else if (day!.MayTake(record.Length + 1, line))
             {
-                return;
+                header.AddRow(day.Builder, line, row, text);
             }
-        }
-
-        dayBytes += record.Length + 1;
-        if (dayBytes > BulkLimits.MaxDayBytes)
-        {
-            day!.Add(line, "", SheetRule.DayTooLarge, "The day's text is longer than 2 MB.");
-            return;
-        }
-
-        if (!valid)
-        {
-            day!.Add(line, "", SheetRule.Utf8, "The line is not UTF-8.");
-        }
-        else if (!split)
-        {
-            day!.Add(line, "", SheetRule.QuoteSyntax, "A quote stands where RFC 4180 allows none.");
-        }
-        else if (row.Count != header.Columns)
-        {
-            day!.Add(line, "", SheetRule.FieldCount, $"The line has {row.Count} fields, the header {header.Columns}.");
-        }
-        else
-        {
-            Span<FieldSlice> byField = stackalloc FieldSlice[SheetFields.Count];
-            header.Sort(row.Fields, byField);
-            day!.AddCell(line, text, byField);
         }
     }
 
-    private void ReadHeader(bool readable, ReadOnlySpan<byte> text)
+    private void ReadHeader(ReadOnlySpan<byte> text, bool isUnclosed)
     {
-        if (readable)
+        if (isUnclosed)
         {
-            header = CsvHeader.Read(row.Fields, text, needsDate: true, headerProblems);
+            headerProblems.Add(line, "", SheetRule.QuoteUnclosed, "A quote opened in the header is not closed in it.");
         }
         else
         {
-            headerProblems.Add(new(1, "", SheetRule.HeaderMissing, "The first line is not a CSV header in UTF-8."));
+            header = CsvHeader.Read(line, row, text, needsDate: true, headerProblems);
         }
 
         Stopped = header is null;
         warnings = header?.Warnings() ?? [];
     }
 
-    private bool BeginDay(ReadOnlySpan<byte> text, ICollection<BulkDay> completed)
+    // Goes on with the day being read or begins the next. False when that is one too many.
+    private bool EnterDay(ReadOnlySpan<byte> record, ReadOnlySpan<byte> text, ICollection<BulkDay> completed)
     {
-        dayText = text.ToArray();
-        dayBytes = 0;
-        if (++count > BulkLimits.MaxDays)
+        var isShort = row.Count <= header!.Date;
+        var dateText = isShort ? record : row.Fields[header.Date].Of(text);
+        if (!row.IsWellFormed && dateText.IndexOfAny(",\"\n"u8) is var end and >= 0)
         {
-            Give(new(null, [new(line, "", SheetRule.TooManyDays, "A body holds at most 4000 days; the rest was not read.")], []), completed);
-            Stopped = true;
-            return false;
+            // The quote stands in the date itself.
+            dateText = dateText[..end];
         }
 
-        date = DateText.TryParse(text, out var read) ? read : null;
-        day = new(context, SheetFields.Csv, date, line);
-        if (date is null)
+        if (day is not null && (isShort || dateText.SequenceEqual(day.Text)))
         {
-            day.Add(line, "date", SheetRule.DateSyntax, $"{SheetBuilder.Quote(text)} is not a date, yyyy-MM-dd.");
-        }
-        else if (!dates.Add(date.Value))
-        {
-            day.Add(line, "date", SheetRule.DateAgain, "The date came earlier in this body; its rows must stand together.");
+            return true;
         }
 
-        return true;
+        EndDay(completed);
+        day = new(context, dates, dateText, line);
+        Stopped = dates.AreTooMany;
+        if (Stopped)
+        {
+            EndDay(completed);
+        }
+
+        return !Stopped;
     }
 
     private void EndDay(ICollection<BulkDay> completed)
     {
         if (day is not null)
         {
-            Give(day.Build(warnings), completed);
+            completed.Add(day.Build(warnings));
+            day = null;
         }
-
-        (day, dayText, date) = (null, null, null);
     }
 
-    private void Give(SheetReading reading, ICollection<BulkDay> completed) =>
-        completed.Add(new(BulkLimits.Shown(dayText), date, reading, dayBytes));
-
-    private void UnclosedQuote(ReadOnlySpan<byte> rest, ICollection<BulkDay> completed)
-    {
-        if (header is null)
-        {
-            headerProblems.Add(new(1, "", SheetRule.QuoteUnclosed, "A quote opened in the header is never closed."));
-            return;
-        }
-
-        // The date of the broken row decides whether it belongs to the day being read.
-        row.Split(rest[..rest.IndexOf((byte)'"')], out var text);
-        var place = header.Date < row.Count ? row.Fields[header.Date] : FieldSlice.Absent;
-        if (place.Length > 0 && (dayText is null || !place.Of(text).SequenceEqual(dayText)))
-        {
-            EndDay(completed);
-            BeginDay(place.Of(text), completed);
-        }
-        else if (day is null)
-        {
-            BeginDay(BulkLimits.Shown(rest) is var shown ? System.Text.Encoding.UTF8.GetBytes(shown) : default, completed);
-        }
-
-        day?.Add(line, "", SheetRule.QuoteUnclosed, "A quote opened on this line is never closed; nothing after it was read.");
-    }
-
+    // The rest of a line that is too long to keep.
     private void DropTooLong(ICollection<BulkDay> completed)
     {
+        if (records.InsideQuotes)
+        {
+            ReadRow(pending.Unread, isOpen: true, completed);
+            return;
+        }
+
         if (header is null)
         {
-            headerProblems.Add(new(1, "", SheetRule.HeaderMissing, "The first line is longer than 2 MB."));
+            headerProblems.Add(line, "", SheetRule.HeaderMissing, "The first line is longer than 2 MB.");
             Stopped = true;
             return;
         }
 
-        CsvRecords.Find(pending.Unread, out _, out _, out var openQuote);
-        if (openQuote)
+        row.Split(pending.Unread, out var text);
+        if (EnterDay(pending.Unread, text, completed))
         {
-            UnclosedQuote(pending.Unread, completed);
-            EndDay(completed);
-            Stopped = true;
-            return;
+            day!.MayTake(pending.Unread.Length, line);
+            skipping = true;
+            pending.Skip(pending.Unread.Length);
+        }
+    }
+
+    private bool SkipLine()
+    {
+        var end = pending.Unread.IndexOf((byte)'\n');
+        pending.Skip(end < 0 ? pending.Unread.Length : end + 1);
+        if (end >= 0)
+        {
+            skipping = false;
+            line += 1 + records.InnerLines;
+            records.Reset();
         }
 
-        if (!skipping)
-        {
-            if (day is null)
-            {
-                BeginDay(pending.Unread[..BulkLimits.MaxShownText], completed);
-            }
-
-            day?.Add(line, "", SheetRule.DayTooLarge, "The line is longer than 2 MB.");
-        }
-
-        skipping = true;
-        pending.Skip(pending.Unread.Length);
+        return !skipping;
     }
 }

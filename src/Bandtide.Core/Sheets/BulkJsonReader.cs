@@ -2,13 +2,14 @@ using Bandtide.Core.Time;
 
 namespace Bandtide.Core.Sheets;
 
-/// <summary>Many day sheets as NDJSON: one JSON sheet a line.</summary>
+/// <summary>Many day sheets as NDJSON: one JSON sheet a line. Empty lines are passed over.</summary>
 public sealed class BulkJsonReader(SheetContext context) : IBulkReader
 {
+    private const int PieceBytes = 64 * 1024;
+
     private readonly PendingBytes pending = new();
-    private readonly HashSet<DateOnly> dates = [];
+    private readonly BulkDates dates = new();
     private int searched;
-    private int count;
     private bool skipping;
     private bool first = true;
 
@@ -25,37 +26,12 @@ public sealed class BulkJsonReader(SheetContext context) : IBulkReader
     public void Feed(ReadOnlySpan<byte> chunk, ICollection<BulkDay> completed)
     {
         ArgumentNullException.ThrowIfNull(completed);
-        if (Stopped)
+        while (!chunk.IsEmpty && !Stopped)
         {
-            return;
-        }
-
-        pending.Append(chunk);
-        while (!Stopped)
-        {
-            var unread = pending.Unread;
-            var end = unread[searched..].IndexOf((byte)'\n');
-            if (end < 0)
-            {
-                searched = unread.Length;
-                if (searched > BulkLimits.MaxDayBytes)
-                {
-                    DropTooLong(completed);
-                }
-
-                return;
-            }
-
-            end += searched;
-            searched = 0;
-            var line = unread[..end];
-            if (!skipping)
-            {
-                Line(line.EndsWith("\r"u8) ? line[..^1] : line, completed);
-            }
-
-            skipping = false;
-            pending.Skip(end + 1);
+            var piece = chunk[..Math.Min(chunk.Length, PieceBytes)];
+            chunk = chunk[piece.Length..];
+            pending.Append(piece);
+            ReadLines(completed);
         }
     }
 
@@ -65,18 +41,48 @@ public sealed class BulkJsonReader(SheetContext context) : IBulkReader
         ArgumentNullException.ThrowIfNull(completed);
         if (endedProperly && !Stopped && !skipping)
         {
-            Line(pending.Unread, completed);
+            ReadLine(pending.Unread, completed);
         }
 
         Stopped = true;
     }
 
+    private void ReadLines(ICollection<BulkDay> completed)
+    {
+        while (!Stopped)
+        {
+            var unread = pending.Unread;
+            var end = unread[searched..].IndexOf((byte)'\n');
+            if (end < 0)
+            {
+                searched = unread.Length;
+                DropTooLong(completed);
+                return;
+            }
+
+            end += searched;
+            searched = 0;
+            if (!skipping)
+            {
+                ReadLine(unread[..end], completed);
+            }
+
+            skipping = false;
+            pending.Skip(end + 1);
+        }
+    }
+
     // A line that never ends is told once and its rest thrown away.
     private void DropTooLong(ICollection<BulkDay> completed)
     {
+        if (searched <= BulkLimits.MaxDayBytes)
+        {
+            return;
+        }
+
         if (!skipping)
         {
-            Refuse(pending.Unread, completed, new(0, "", SheetRule.DayTooLarge, "The line is longer than 2 MB."));
+            ReadLine(pending.Unread, completed);
         }
 
         skipping = true;
@@ -84,53 +90,53 @@ public sealed class BulkJsonReader(SheetContext context) : IBulkReader
         searched = 0;
     }
 
-    private void Line(ReadOnlySpan<byte> line, ICollection<BulkDay> completed)
+    private void ReadLine(ReadOnlySpan<byte> line, ICollection<BulkDay> completed)
     {
-        var text = first ? CsvRecords.WithoutMark(line) : line;
+        var text = first ? line[Utf8Mark.LengthIn(line)..] : line;
         first = false;
-        if (text.Trim((byte)' ').IsEmpty)
+        if (text.Trim(" \t\r"u8).IsEmpty)
         {
             return;
         }
 
-        if (text.Length > BulkLimits.MaxDayBytes)
-        {
-            Refuse(text, completed, new(0, "", SheetRule.DayTooLarge, "The line is longer than 2 MB."));
-            return;
-        }
+        completed.Add(text.Length > BulkLimits.MaxDayBytes
+            ? Refused(text, text, SheetRule.DayTooLarge, "", "The line is longer than 2 MB.")
+            : ReadSheet(text));
+        Stopped = dates.AreTooMany;
+    }
 
-        if (!DaySheetJson.TryDate(text, out var told, out var problem))
+    private BulkDay ReadSheet(ReadOnlySpan<byte> text)
+    {
+        if (!JsonSheet.TryFindDate(text, out var told, out var reason))
         {
-            Refuse(text, completed, problem);
-            return;
+            return Refused(text, text, SheetRule.JsonSyntax, "", reason);
         }
 
         if (told is null || !DateText.TryParse(told, out var date))
         {
-            Refuse(text, completed, new(0, "date", SheetRule.DateSyntax, told is null ? "The sheet has no date." : "The date is not yyyy-MM-dd."));
-            return;
+            return told is null
+                ? Refused(text, text, SheetRule.DateSyntax, "date", "The sheet has no date, yyyy-MM-dd.")
+                : Refused(text, System.Text.Encoding.UTF8.GetBytes(told), SheetRule.DateSyntax, "date", "The date is not yyyy-MM-dd.");
         }
 
         var builder = new SheetBuilder(context, SheetFields.Json, date, 0);
-        if (!dates.Add(date))
+        var reading = JsonSheet.Read(text, builder, out var isJson);
+        if (!isJson)
         {
-            builder.Add(0, "date", SheetRule.DateAgain, "The date came earlier in this body; send each day once.");
+            return Refused(text, text, SheetRule.JsonSyntax, "", reading.Problems[^1].Message);
         }
 
-        Give(new(DateText.Format(date), date, DaySheetJson.ReadCells(text, builder), text.Length), completed);
+        // Only what could be read counts as the date's coming.
+        var problems = new ProblemList();
+        dates.Judge(problems, 0, date);
+        return new(DateText.Format(date), date, problems.Count > 0 ? new(null, [.. problems.Items, .. reading.Problems.Take(ProblemList.Max - 1)], reading.Warnings) : reading, text.Length);
     }
 
-    private void Refuse(ReadOnlySpan<byte> text, ICollection<BulkDay> completed, SheetProblem problem) =>
-        Give(new(BulkLimits.Shown(text), null, new(null, [problem], []), text.Length), completed);
-
-    private void Give(BulkDay day, ICollection<BulkDay> completed)
+    private BulkDay Refused(ReadOnlySpan<byte> text, ReadOnlySpan<byte> shown, string rule, string field, string message)
     {
-        if (++count > BulkLimits.MaxDays)
-        {
-            day = day with { Reading = new(null, [new(0, "", SheetRule.TooManyDays, "A body holds at most 4000 days; the rest was not read.")], []) };
-            Stopped = true;
-        }
-
-        completed.Add(day);
+        var problems = new ProblemList();
+        dates.Judge(problems, 0, null);
+        problems.Add(0, field, rule, message);
+        return new(ShownText.Cut(shown, BulkLimits.MaxShownBytes), null, new(null, problems.Items, []), text.Length);
     }
 }

@@ -1,15 +1,18 @@
 using System.Buffers;
+using System.Buffers.Text;
 using System.Text;
-using System.Text.Unicode;
 using Bandtide.Core.Bands;
 using Bandtide.Core.Time;
 
 namespace Bandtide.Core.Sheets;
 
 /// <summary>One day sheet as CSV: RFC 4180, UTF-8 with or without byte order mark, LF or CRLF, decimal point.</summary>
-/// <remarks>Blanks around a value are not trimmed: RFC 4180 makes them part of the field.</remarks>
+/// <remarks>Blanks around a value are not trimmed: RFC 4180 makes them part of the field. Empty lines are passed over.</remarks>
 public static class DaySheetCsv
 {
+    // Date, hour, code of at most 24 characters, and eight values of at most ten, each with what separates it.
+    private const int MaxRowBytes = 160;
+
     /// <summary>Reads a body.</summary>
     /// <param name="body">The whole body.</param>
     /// <param name="date">Date of the sheet; a <c>date</c> column, if there is one, must say the same.</param>
@@ -18,108 +21,122 @@ public static class DaySheetCsv
     {
         ArgumentNullException.ThrowIfNull(context);
         var builder = new SheetBuilder(context, SheetFields.Csv, date, 0);
-        var text = CsvRecords.WithoutMark(body);
-        if (!Utf8.IsValid(text))
-        {
-            builder.Add(0, "", SheetRule.Utf8, "The body is not UTF-8.");
-            return builder.Build([]);
-        }
-
-        CsvHeader? header = null;
-        var row = new CsvRow();
-        Span<FieldSlice> byField = stackalloc FieldSlice[SheetFields.Count];
         var expected = Encoding.ASCII.GetBytes(DateText.Format(date));
-        for (var line = 1; !text.IsEmpty;)
+        var records = new CsvRecordFinder();
+        var row = new CsvRow();
+        CsvHeader? header = null;
+        var line = 1;
+        for (var rest = body[Utf8Mark.LengthIn(body)..]; !rest.IsEmpty;)
         {
-            var length = CsvRecords.Find(text, out var lines, out var next, out var openQuote);
-            if (length < 0)
+            var length = records.Find(rest, out var next);
+            if (length < 0 && records.InsideQuotes)
             {
-                if (openQuote)
-                {
-                    builder.Add(line, "", SheetRule.QuoteUnclosed, "A quote opened on this line is never closed.");
-                    break;
-                }
-
-                (length, next) = (text.Length, text.Length);
+                builder.Problems.Add(line, "", SheetRule.QuoteUnclosed, "A quote opened on this line is never closed.");
+                return builder.Build([]);
             }
 
-            var record = text[..length];
-            text = text[next..];
+            var record = length < 0 ? CsvRecordFinder.WithoutReturn(rest) : rest[..length];
+            rest = length < 0 ? default : rest[next..];
             if (!record.IsEmpty)
             {
-                if (!row.Split(record, out var fields))
+                row.Split(record, out var text);
+                if (header is not null)
                 {
-                    builder.Add(line, "", SheetRule.QuoteSyntax, "A quote stands where RFC 4180 allows none.");
+                    AddRow(header, builder, line, row, text, expected);
                 }
-                else if (header is null)
+                else if ((header = CsvHeader.Read(line, row, text, needsDate: false, builder.Problems)) is null)
                 {
-                    var problems = new List<SheetProblem>();
-                    header = CsvHeader.Read(row.Fields, fields, needsDate: false, problems);
-                    if (header is null)
-                    {
-                        return new(null, problems, []);
-                    }
-                }
-                else if (row.Count != header.Columns)
-                {
-                    builder.Add(line, "", SheetRule.FieldCount, $"The line has {row.Count} fields, the header {header.Columns}.");
-                }
-                else
-                {
-                    header.Sort(row.Fields, byField);
-                    builder.AddCell(line, fields, byField);
-                    if (header.Date >= 0 && !row.Fields[header.Date].Of(fields).SequenceEqual(expected))
-                    {
-                        builder.Add(line, "date", SheetRule.DateMismatch, $"{SheetBuilder.Quote(row.Fields[header.Date].Of(fields))} is not the day being sent, {DateText.Format(date)}.");
-                    }
+                    return builder.Build([]);
                 }
             }
 
-            line += lines;
+            line += 1 + records.InnerLines;
+            records.Reset();
         }
 
-        if (header is null && !builder.HasProblems)
+        if (header is null)
         {
-            builder.Add(1, "", SheetRule.HeaderMissing, "The body is empty; it must begin with a header line.");
+            builder.Problems.Add(1, "", SheetRule.HeaderMissing, "The body is empty; it must begin with a header line.");
         }
 
         return builder.Build(header?.Warnings() ?? []);
     }
 
     /// <summary>Writes a sheet with all columns, rows by hour, then band identity.</summary>
+    /// <exception cref="ArgumentException">A band is not in the plan.</exception>
     public static void Write(IBufferWriter<byte> writer, CellGrid cells, BandPlan plan)
+    {
+        WriteHeader(writer, withDate: false);
+        WriteRows(writer, null, cells, plan);
+    }
+
+    /// <summary>Writes the header line of one sheet or, with a <c>date</c> column before the others, of many.</summary>
+    public static void WriteHeader(IBufferWriter<byte> writer, bool withDate)
+    {
+        ArgumentNullException.ThrowIfNull(writer);
+        Encoding.ASCII.GetBytes((withDate ? "date," : "") + string.Join(',', SheetFields.Csv) + "\n", writer);
+    }
+
+    /// <summary>Writes the rows of one of many sheets, its date in each.</summary>
+    /// <exception cref="ArgumentException">A band is not in the plan.</exception>
+    public static void WriteRows(IBufferWriter<byte> writer, DaySheet sheet, BandPlan plan)
+    {
+        ArgumentNullException.ThrowIfNull(sheet);
+        WriteRows(writer, DateText.Format(sheet.Date) + ",", sheet.Cells, plan);
+    }
+
+    private static void AddRow(CsvHeader header, SheetBuilder builder, int line, CsvRow row, ReadOnlySpan<byte> text, ReadOnlySpan<byte> expected)
+    {
+        header.AddRow(builder, line, row, text);
+        if (header.Date < 0 || row.Count != header.Columns)
+        {
+            return;
+        }
+
+        var told = row.Fields[header.Date].Of(text);
+        if (!told.SequenceEqual(expected))
+        {
+            builder.Problems.Add(line, "date", SheetRule.DateMismatch, $"{ShownText.Quote(told)} is not the day being sent, {Encoding.ASCII.GetString(expected)}.");
+        }
+    }
+
+    private static void WriteRows(IBufferWriter<byte> writer, string? start, CellGrid cells, BandPlan plan)
     {
         ArgumentNullException.ThrowIfNull(writer);
         ArgumentNullException.ThrowIfNull(cells);
         ArgumentNullException.ThrowIfNull(plan);
-        var text = new StringBuilder(string.Join(',', SheetFields.Csv)).Append('\n');
+        var codes = plan.CodesOf(cells).Select(Encoding.ASCII.GetBytes).ToArray();
         for (var hour = 0; hour < CellGrid.Hours; hour++)
         {
             for (var b = 0; b < cells.BandCount; b++)
             {
                 if (cells.Has(hour, b))
                 {
-                    AppendCell(text, cells, plan, hour, b);
+                    var target = writer.GetSpan(MaxRowBytes);
+                    var length = Encoding.ASCII.GetBytes(start, target);
+                    writer.Advance(length + WriteRow(target[length..], cells, hour, b, codes[b]));
                 }
             }
         }
-
-        Encoding.UTF8.GetBytes(text.ToString(), writer);
     }
 
-    private static void AppendCell(StringBuilder text, CellGrid cells, BandPlan plan, int hour, int b)
+    private static int WriteRow(Span<byte> target, CellGrid cells, int hour, int band, ReadOnlySpan<byte> code)
     {
-        text.Append(hour).Append(',').Append(plan.ById(cells.BandIds[b])?.Code);
+        Utf8Formatter.TryFormat(hour, target, out var length);
+        target[length++] = (byte)',';
+        code.CopyTo(target[length..]);
+        length += code.Length;
         for (var quantity = Quantity.Sweeps; quantity <= Quantity.Coverage; quantity++)
         {
-            text.Append(',');
-            var value = cells[quantity, hour, b];
+            target[length++] = (byte)',';
+            var value = cells[quantity, hour, band];
             if (value != CellGrid.Missing)
             {
-                text.Append(FixedPoint.Text(value, SheetFields.Decimals(quantity)));
+                length += FixedPoint.Write(target[length..], value, SheetFields.Decimals(quantity));
             }
         }
 
-        text.Append('\n');
+        target[length++] = (byte)'\n';
+        return length;
     }
 }

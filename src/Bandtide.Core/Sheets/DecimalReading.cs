@@ -9,6 +9,10 @@ internal readonly record struct DecimalReading(DecimalStatus Status, long Units,
     /// <summary>Half away from zero.</summary>
     public long Rounded => Units + (Tail / 2);
 
+    /// <summary>Below 0 when the first is less, above 0 when it is greater; both read at the same resolution.</summary>
+    public static int Compare(DecimalReading a, DecimalReading b) =>
+        a.Units != b.Units ? a.Units.CompareTo(b.Units) : a.Tail.CompareTo(b.Tail);
+
     /// <summary>Whether the number as it was written lies in a range of units, both ends included.</summary>
     public bool Within(long low, long high) =>
         (Units > low || (Units == low && Tail >= 0)) && (Units < high || (Units == high && Tail <= 0));

@@ -1,25 +1,21 @@
 using System.Globalization;
-using System.Text;
 using Bandtide.Core.Bands;
+using Bandtide.Core.Time;
 
 namespace Bandtide.Core.Sheets;
 
 /// <summary>Collects the cells of one day, judges each by the contract's rules, and gives a sheet or every problem found.</summary>
 internal sealed class SheetBuilder
 {
-    public const int MaxProblems = 100;
-    private const int MaxQuoted = 40;
     private static readonly TimeSpan ClockAllowance = TimeSpan.FromMinutes(5);
 
     private readonly SheetContext context;
     private readonly IReadOnlyList<string> names;
     private readonly DateOnly? date;
-    private readonly List<SheetProblem> problems = [];
     private readonly List<(Band Band, int[] Cells)> bands = [];
     private readonly Dictionary<short, int> places = [];
     private readonly int endedHours;
-    private int lastPlace = -1;
-    private short lastBand = -1;
+    private int lastPlace;
     private bool anyCell;
 
     /// <param name="context">Plan and moment of judgement.</param>
@@ -29,6 +25,7 @@ internal sealed class SheetBuilder
     public SheetBuilder(SheetContext context, IReadOnlyList<string> names, DateOnly? date, int line)
     {
         (this.context, this.names, this.date) = (context, names, date);
+        endedHours = CellGrid.Hours;
         if (date is not { } day)
         {
             return;
@@ -37,108 +34,106 @@ internal sealed class SheetBuilder
         var today = DateOnly.FromDateTime(context.Now.UtcDateTime);
         if (day.Year < 1950 || day > today)
         {
-            Add(line, "date", SheetRule.DateRange, $"{Time.DateText.Format(day)} is not from 1950-01-01 to today, {Time.DateText.Format(today)} (UTC).");
-            endedHours = 24;
+            Problems.Add(line, "date", SheetRule.DateRange, $"{DateText.Format(day)} is not from 1950-01-01 to today, {DateText.Format(today)} (UTC).");
             return;
         }
 
         var sinceMidnight = context.Now + ClockAllowance - new DateTimeOffset(day.ToDateTime(TimeOnly.MinValue), TimeSpan.Zero);
-        endedHours = (int)Math.Min(24, Math.Floor(sinceMidnight.TotalHours));
+        endedHours = (int)Math.Min(CellGrid.Hours, Math.Floor(sinceMidnight.TotalHours));
     }
 
-    public bool HasProblems => problems.Count > 0;
-
-    public void Add(int line, string field, string rule, string message)
-    {
-        if (problems.Count < MaxProblems)
-        {
-            problems.Add(new(line, field, rule, message));
-        }
-    }
+    /// <summary>What was found so far.</summary>
+    public ProblemList Problems { get; } = new();
 
     /// <summary>Judges one cell and keeps it when it is good.</summary>
     /// <param name="line">Its line or place.</param>
+    /// <param name="code">Its band code.</param>
     /// <param name="text">The text that the slices point into.</param>
     /// <param name="slices">One per <see cref="SheetField"/>.</param>
-    public void AddCell(int line, ReadOnlySpan<byte> text, ReadOnlySpan<FieldSlice> slices)
+    /// <param name="told">Fields whose problem is told already, bit by <see cref="SheetField"/>: the others are judged.</param>
+    public void AddCell(int line, ReadOnlySpan<byte> code, ReadOnlySpan<byte> text, ReadOnlySpan<FieldSlice> slices, int told = 0)
     {
         anyCell = true;
-        var before = problems.Count;
+        if (Problems.IsFull)
+        {
+            return;
+        }
+
+        var before = Problems.Count;
         Span<int> values = stackalloc int[CellGrid.QuantityCount];
-        var hour = Hour(line, text, slices[(int)SheetField.Hour]);
-        var place = Place(line, text, slices[(int)SheetField.Band]);
-        for (var field = SheetField.Sweeps; field <= SheetField.Coverage; field++)
+        var hour = IsTold(told, SheetField.Hour) ? 0 : Hour(line, slices[(int)SheetField.Hour].Of(text));
+        var place = IsTold(told, SheetField.Band) ? 0 : Place(line, code);
+        for (var quantity = Quantity.Sweeps; quantity <= Quantity.Coverage; quantity++)
         {
-            values[(int)SheetFields.QuantityOf(field)] = Value(line, field, text, slices[(int)field]);
+            var field = SheetFields.FieldOf(quantity);
+            values[(int)quantity] = IsTold(told, field) ? CellGrid.Missing : Value(line, quantity, slices[(int)field].Of(text));
         }
 
-        if (problems.Count != before || problems.Count == MaxProblems)
+        CheckPercentile(line, values, slices[(int)SheetField.Level].Of(text), slices[(int)SheetField.LevelP90].Of(text));
+        if (Problems.Count != before || told != 0)
         {
             return;
         }
 
-        CheckPercentile(line, text, slices);
-        var cells = bands[place].Cells.AsSpan(hour * CellGrid.QuantityCount, CellGrid.QuantityCount);
-        if (cells[(int)Quantity.Sweeps] != CellGrid.Missing)
+        var cell = bands[place].Cells.AsSpan(hour * CellGrid.QuantityCount, CellGrid.QuantityCount);
+        if (cell[(int)Quantity.Sweeps] != CellGrid.Missing)
         {
-            Add(line, Name(SheetField.Band), SheetRule.CellTwice, $"Hour {hour} of {bands[place].Band.Code} is there already.");
+            Problems.Add(line, Name(SheetField.Band), SheetRule.CellTwice, $"Hour {hour} of {bands[place].Band.Code} is there already.");
             return;
         }
 
-        values.CopyTo(cells);
+        values.CopyTo(cell);
     }
 
+    /// <summary>The sheet, or every problem found.</summary>
+    /// <param name="warnings">What the text alone can tell.</param>
     public SheetReading Build(IReadOnlyList<SheetWarning> warnings)
     {
-        if (!anyCell && problems.Count == 0)
+        if (!anyCell && Problems.Count == 0)
         {
-            Add(0, "", SheetRule.NoCells, "The sheet holds no cell. A day without observation is not sent at all.");
+            Problems.Add(0, "", SheetRule.NoCells, "The sheet holds no cell. A day without observation is not sent at all.");
         }
 
-        return problems.Count > 0 || date is not { } day
-            ? new(null, problems, warnings)
+        return Problems.Count > 0 || date is not { } day
+            ? new(null, Problems.Items, warnings)
             : new(new(day, Grid()), [], warnings);
     }
 
-    /// <summary>A value in quotes for a message, cut when long; bytes that are not UTF-8 show as a replacement mark.</summary>
-    public static string Quote(ReadOnlySpan<byte> text)
-    {
-        var shown = Encoding.UTF8.GetString(text[..Math.Min(text.Length, MaxQuoted)]);
-        var clean = string.Concat(shown.Select(c => char.IsControl(c) ? '\uFFFD' : c));
-        return text.Length > MaxQuoted ? $"'{clean}…'" : $"'{clean}'";
-    }
+    private static bool IsTold(int told, SheetField field) => (told & (1 << (int)field)) != 0;
 
     private string Name(SheetField field) => names[(int)field];
 
-    private int Hour(int line, ReadOnlySpan<byte> text, FieldSlice slice)
+    private int Hour(int line, ReadOnlySpan<byte> value)
     {
-        var value = slice.Of(text);
-        if (value.IsEmpty)
+        if (!DecimalText.TryShort(value, 0, out var hour))
         {
-            Missing(line, SheetField.Hour);
+            if (value.IsEmpty)
+            {
+                Missing(line, SheetField.Hour);
+                return 0;
+            }
+
+            var number = DecimalText.Read(value, 0);
+            hour = number.Status == DecimalStatus.Ok && number.Tail == 0 ? number.Units : -1;
+        }
+
+        if (hour is < 0 or >= CellGrid.Hours)
+        {
+            Problems.Add(line, Name(SheetField.Hour), SheetRule.HourRange, $"{ShownText.Quote(value)} is not a whole hour from 0 to 23.");
             return 0;
         }
 
-        var number = DecimalText.Read(value, 0);
-        if (number.Status != DecimalStatus.Ok || number.Tail != 0 || number.Units is < 0 or > 23)
+        if (hour >= endedHours)
         {
-            Add(line, Name(SheetField.Hour), SheetRule.HourRange, $"{Quote(value)} is not a whole hour from 0 to 23.");
-            return 0;
+            Problems.Add(line, Name(SheetField.Hour), SheetRule.HourNotEnded, string.Create(
+                CultureInfo.InvariantCulture, $"Hour {hour} (UTC) has not ended; it is {context.Now.UtcDateTime:yyyy-MM-dd HH:mm} UTC now."));
         }
 
-        if (date is not null && number.Units >= endedHours)
-        {
-            Add(line, Name(SheetField.Hour), SheetRule.HourNotEnded, string.Create(
-                CultureInfo.InvariantCulture, $"Hour {number.Units} (UTC) has not ended; it is {context.Now.UtcDateTime:yyyy-MM-dd HH:mm} UTC now."));
-        }
-
-        return (int)number.Units;
+        return (int)hour;
     }
 
-    // Rows of one hour usually name each band once, rows of one band come together: remember the last.
-    private int Place(int line, ReadOnlySpan<byte> text, FieldSlice slice)
+    private int Place(int line, ReadOnlySpan<byte> code)
     {
-        var code = slice.Of(text);
         if (code.IsEmpty)
         {
             Missing(line, SheetField.Band);
@@ -147,13 +142,15 @@ internal sealed class SheetBuilder
 
         if (!context.Plan.TryGet(code, out var band))
         {
-            Add(line, Name(SheetField.Band), SheetRule.BandUnknown, $"{Quote(code)} is not a band of the plan; GET /api/v1/bands lists them.");
+            Problems.Add(line, Name(SheetField.Band), SheetRule.BandUnknown, $"{ShownText.Quote(code)} is not a band of the plan; GET /api/v1/bands lists them.");
             return 0;
         }
 
-        if (band.Id == lastBand)
+        // Rows of one hour name the bands in the same order as those of the hour before; rows of one band come together.
+        var next = lastPlace + 1 < bands.Count ? lastPlace + 1 : 0;
+        if (next < bands.Count && ReferenceEquals(bands[next].Band, band))
         {
-            return lastPlace;
+            return lastPlace = next;
         }
 
         if (!places.TryGetValue(band.Id, out var place))
@@ -165,13 +162,12 @@ internal sealed class SheetBuilder
             places.Add(band.Id, place);
         }
 
-        (lastBand, lastPlace) = (band.Id, place);
-        return place;
+        return lastPlace = place;
     }
 
-    private int Value(int line, SheetField field, ReadOnlySpan<byte> text, FieldSlice slice)
+    private int Value(int line, Quantity quantity, ReadOnlySpan<byte> value)
     {
-        var value = slice.Of(text);
+        var field = SheetFields.FieldOf(quantity);
         if (value.IsEmpty)
         {
             if (SheetFields.IsRequired(field))
@@ -182,76 +178,70 @@ internal sealed class SheetBuilder
             return CellGrid.Missing;
         }
 
-        var quantity = SheetFields.QuantityOf(field);
-        var number = DecimalText.Read(value, SheetFields.Decimals(quantity));
+        var limits = FieldLimits.Of(quantity);
+        if (DecimalText.TryShort(value, limits.Decimals, out var units) && units >= limits.Low && units <= limits.High)
+        {
+            return (int)units;
+        }
+
+        var number = DecimalText.Read(value, limits.Decimals);
         if (number.Status == DecimalStatus.Ok)
         {
-            var (low, high, rule, allowed) = Limits(quantity);
-            if (number.Within(low, high) && (quantity != Quantity.Sweeps || number.Tail == 0))
+            if (number.Within(limits.Low, limits.High) && (quantity != Quantity.Sweeps || number.Tail == 0))
             {
                 return (int)number.Rounded;
             }
 
-            Add(line, Name(field), rule, $"{Quote(value)} is not {allowed}.");
+            Problems.Add(line, Name(field), limits.Rule, $"{ShownText.Quote(value)} is not {limits.Allowed}.");
         }
         else if (number.Status == DecimalStatus.NotFinite)
         {
-            Add(line, Name(field), SheetRule.NotFinite, $"{Quote(value)} is not a finite number; leave an unknown optional value empty.");
+            Problems.Add(line, Name(field), SheetRule.NotFinite, $"{ShownText.Quote(value)} is not a finite number; leave an unknown optional value empty.");
         }
         else
         {
-            Add(line, Name(field), SheetRule.NumberSyntax, $"{Quote(value)} is not a number with a decimal point.");
+            Problems.Add(line, Name(field), SheetRule.NumberSyntax, $"{ShownText.Quote(value)} is not a number with a decimal point.");
         }
 
         return CellGrid.Missing;
     }
 
-    private static (long Low, long High, string Rule, string Allowed) Limits(Quantity quantity) => quantity switch
+    // Compared as written. Rounding keeps order, so only values that round to the same have to be looked at again.
+    private void CheckPercentile(int line, ReadOnlySpan<int> values, ReadOnlySpan<byte> level, ReadOnlySpan<byte> p90)
     {
-        Quantity.Sweeps => (1, SheetFields.MaxSweeps, SheetRule.SweepsRange, "a whole number from 1 to 1000000"),
-        Quantity.Occupancy or Quantity.Steady or Quantity.Coverage => (0, 10_000, SheetRule.ShareRange, "a share from 0 to 1"),
-        _ => (-SheetFields.MaxDecibels * 100, SheetFields.MaxDecibels * 100, SheetRule.DecibelRange, "from -300 to 300 dB"),
-    };
-
-    // Compared as written, before rounding.
-    private void CheckPercentile(int line, ReadOnlySpan<byte> text, ReadOnlySpan<FieldSlice> slices)
-    {
-        var level = slices[(int)SheetField.Level].Of(text);
-        var p90 = slices[(int)SheetField.LevelP90].Of(text);
-        if (level.IsEmpty || p90.IsEmpty)
+        var (low, high) = (values[(int)Quantity.Level], values[(int)Quantity.LevelP90]);
+        if (low == CellGrid.Missing || high == CellGrid.Missing || high > low)
         {
             return;
         }
 
-        var (a, b) = (DecimalText.Read(level, 2), DecimalText.Read(p90, 2));
-        if (b.Units < a.Units || (b.Units == a.Units && b.Tail < a.Tail))
+        if (high < low || DecimalReading.Compare(DecimalText.Read(p90, 14), DecimalText.Read(level, 14)) < 0)
         {
-            Add(line, Name(SheetField.LevelP90), SheetRule.P90BelowLevel, $"{Quote(p90)} is below the level {Quote(level)}.");
+            Problems.Add(line, Name(SheetField.LevelP90), SheetRule.P90BelowLevel, $"{ShownText.Quote(p90)} is below the level {ShownText.Quote(level)}.");
         }
     }
 
     private void Missing(int line, SheetField field) =>
-        Add(line, Name(field), SheetRule.ValueMissing, $"Every cell needs {Name(field)}.");
+        Problems.Add(line, Name(field), SheetRule.ValueMissing, $"Every cell needs {Name(field)}.");
 
     private CellGrid Grid()
     {
-        var sorted = bands.OrderBy(entry => entry.Band.Id).ToArray();
+        var sorted = bands.ToArray();
+        Array.Sort(sorted, (a, b) => a.Band.Id.CompareTo(b.Band.Id));
         var planes = new int[]?[CellGrid.QuantityCount];
         for (var quantity = 0; quantity < planes.Length; quantity++)
         {
             var plane = new int[CellGrid.Hours * sorted.Length];
-            var any = false;
             for (var b = 0; b < sorted.Length; b++)
             {
-                for (var hour = 0; hour < CellGrid.Hours; hour++)
+                var cells = sorted[b].Cells;
+                for (int from = quantity, to = b; from < cells.Length; from += CellGrid.QuantityCount, to += sorted.Length)
                 {
-                    var value = sorted[b].Cells[(hour * CellGrid.QuantityCount) + quantity];
-                    plane[(hour * sorted.Length) + b] = value;
-                    any |= value != CellGrid.Missing;
+                    plane[to] = cells[from];
                 }
             }
 
-            planes[quantity] = any ? plane : null;
+            planes[quantity] = plane.AsSpan().ContainsAnyExcept(CellGrid.Missing) ? plane : null;
         }
 
         return new([.. sorted.Select(entry => entry.Band.Id)], planes);

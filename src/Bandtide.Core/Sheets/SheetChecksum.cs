@@ -12,6 +12,8 @@ public static class SheetChecksum
     /// <summary>Length of the text.</summary>
     public const int Length = 32;
 
+    private const int CellBytes = 1 + (CellGrid.QuantityCount * sizeof(int));
+
     /// <summary>The checksum, 32 hexadecimal digits.</summary>
     /// <param name="grid">The cells.</param>
     /// <param name="plan">A plan that knows their bands.</param>
@@ -21,41 +23,44 @@ public static class SheetChecksum
         ArgumentNullException.ThrowIfNull(grid);
         ArgumentNullException.ThrowIfNull(plan);
         var places = new (string Code, int Place)[grid.BandCount];
+        var codes = plan.CodesOf(grid);
         for (var b = 0; b < places.Length; b++)
         {
-            var band = plan.ById(grid.BandIds[b]) ?? throw new ArgumentException($"No band has identity {grid.BandIds[b]}.", nameof(plan));
-            places[b] = (band.Code, b);
+            places[b] = (codes[b], b);
         }
 
         Array.Sort(places, (a, b) => string.CompareOrdinal(a.Code, b.Code));
-        using var hash = IncrementalHash.CreateHash(HashAlgorithmName.SHA256);
-        Span<byte> record = stackalloc byte[1 + (CellGrid.QuantityCount * sizeof(int))];
+        // Eight values of a cell and its hour take 33 bytes; a code and the line end behind it at most 25.
+        var text = new byte[(grid.Count * CellBytes) + (places.Length * (Codes.MaxLength + 1))];
+        var length = 0;
         foreach (var (code, band) in places)
         {
-            var any = false;
+            var start = length;
+            length += Encoding.UTF8.GetBytes(code, text.AsSpan(length));
+            text[length++] = (byte)'\n';
+            var cells = length;
             for (var hour = 0; hour < CellGrid.Hours; hour++)
             {
-                if (!grid.Has(hour, band))
+                if (grid.Has(hour, band))
                 {
-                    continue;
+                    Append(grid, hour, band, text.AsSpan(length, CellBytes));
+                    length += CellBytes;
                 }
-
-                if (!any)
-                {
-                    hash.AppendData(Encoding.UTF8.GetBytes(code + "\n"));
-                    any = true;
-                }
-
-                record[0] = (byte)hour;
-                for (var quantity = 0; quantity < CellGrid.QuantityCount; quantity++)
-                {
-                    BinaryPrimitives.WriteInt32LittleEndian(record[(1 + (quantity * sizeof(int)))..], grid[(Quantity)quantity, hour, band]);
-                }
-
-                hash.AppendData(record);
             }
+
+            // A band without cells is as if it were not there.
+            length = length == cells ? start : length;
         }
 
-        return Convert.ToHexStringLower(hash.GetHashAndReset().AsSpan(0, Length / 2));
+        return Convert.ToHexStringLower(SHA256.HashData(text.AsSpan(0, length)).AsSpan(0, Length / 2));
+    }
+
+    private static void Append(CellGrid grid, int hour, int band, Span<byte> target)
+    {
+        target[0] = (byte)hour;
+        for (var quantity = 0; quantity < CellGrid.QuantityCount; quantity++)
+        {
+            BinaryPrimitives.WriteInt32LittleEndian(target[(1 + (quantity * sizeof(int)))..], grid[(Quantity)quantity, hour, band]);
+        }
     }
 }

@@ -24,6 +24,9 @@ public static class SheetFields
     /// <summary>Property names in the order of <see cref="SheetField"/>.</summary>
     public static IReadOnlyList<string> Json => JsonNames;
 
+    /// <summary>Property names as JSON bodies hold them.</summary>
+    internal static byte[][] JsonUtf8 { get; } = [.. JsonNames.Select(System.Text.Encoding.ASCII.GetBytes)];
+
     /// <summary>Whether every cell needs the field.</summary>
     public static bool IsRequired(SheetField field) => field <= SheetField.Occupancy;
 
@@ -37,6 +40,9 @@ public static class SheetFields
 
     /// <summary>The quantity of a field, from <see cref="SheetField.Sweeps"/> on.</summary>
     public static Quantity QuantityOf(SheetField field) => (Quantity)(field - SheetField.Sweeps);
+
+    /// <summary>Place of a column's field in <see cref="SheetField"/>, or -1 for a column that the contract does not know.</summary>
+    internal static int FieldOfColumn(string name) => Array.IndexOf(CsvNames, name);
 
     /// <summary>The field of a quantity.</summary>
     public static SheetField FieldOf(Quantity quantity) => (SheetField)quantity + (int)SheetField.Sweeps;
