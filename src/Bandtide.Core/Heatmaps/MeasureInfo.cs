@@ -16,6 +16,12 @@ public sealed record MeasureInfo(
     /// <summary>Whether it is a share from 0 to 1.</summary>
     public bool IsShare => Decimals == 4;
 
+    /// <summary>Whether it is a difference of two quantities, computed and not stored.</summary>
+    public bool IsDifference => Measure == Measure.Excess;
+
     /// <summary>Size of one stored unit.</summary>
     public double Resolution => IsShare ? 1e-4 : 1e-2;
+
+    /// <summary>Number of stored units in one unit: dividing by it gives the nearest number to the decimal one.</summary>
+    public int StepsPerUnit => IsShare ? 10_000 : 100;
 }

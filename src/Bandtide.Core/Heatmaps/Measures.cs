@@ -28,12 +28,12 @@ public static class Measures
     /// <summary>All values of a measure in a grid, in stored units, <see cref="CellGrid.Missing"/> where there is none.</summary>
     /// <param name="grid">The grid.</param>
     /// <param name="measure">The measure.</param>
-    /// <param name="scratch">At least 24 x bands long; receives values that have to be computed.</param>
+    /// <param name="scratch">At least 24 x bands long where the measure is a difference; receives it.</param>
     /// <returns>As long as the grid's planes, or empty where no cell has the measure.</returns>
     public static ReadOnlySpan<int> Values(CellGrid grid, Measure measure, Span<int> scratch)
     {
         ArgumentNullException.ThrowIfNull(grid);
-        if (measure != Measure.Excess)
+        if (!measure.Info().IsDifference)
         {
             return grid.Plane(measure.Info().Quantity);
         }
@@ -45,11 +45,7 @@ public static class Measures
             return default;
         }
 
-        for (var i = 0; i < signal.Length; i++)
-        {
-            scratch[i] = signal[i] == CellGrid.Missing || floor[i] == CellGrid.Missing ? CellGrid.Missing : signal[i] - floor[i];
-        }
-
+        DayKernel.Subtract(signal, floor, scratch);
         return scratch[..signal.Length];
     }
 }

@@ -6,26 +6,26 @@ using Bandtide.Core.Time;
 
 namespace Bandtide.Core.Heatmaps;
 
-/// <summary>Pools month tiles to a heatmap: means over stations, and the standard deviation between station means.</summary>
+/// <summary>
+/// Pools month tiles to a heatmap: means (without interval) and the spread between stations. What needs the days one by one
+/// is <see cref="DayPool"/>'s.
+/// </summary>
 /// <remarks>
-/// A station's mean is the mean over all its days in the selection, however many months they lie in: tiles hold exact sums.
-/// With the solar clock each month is turned by its own whole number of hours.
+/// The order of stations and months does not matter beyond the last bits of a sum. Memory is that of one heatmap, or of one
+/// for each square where squares vote. Not thread-safe.
 /// </remarks>
 public sealed class TilePool
 {
     private readonly HeatmapQuery query;
-    private readonly HeatmapRows rows;
-    private readonly Votes votes;
-    private readonly int[] stations;
-    private readonly int[] days;
-    private readonly long[] stationSums;
+    private readonly PoolColumns columns;
+    private readonly StationVotes votes;
     private readonly int[] stationDays;
-    private readonly double[] stationMeans;
+    private readonly double[] stationSums;
 
-    /// <summary>Begins a pool.</summary>
-    /// <param name="query">A question that tiles can answer: <see cref="HeatmapQuery.NeedsSheets"/> is false.</param>
-    /// <param name="plan">The bands.</param>
-    /// <exception cref="ArgumentException">The question needs day sheets.</exception>
+    /// <summary>An empty pool.</summary>
+    /// <param name="query">The question: its measure, statistic, clock, layer, vote and <c>mindays</c> count here.</param>
+    /// <param name="plan">The network's bands.</param>
+    /// <exception cref="ArgumentException">The question needs day sheets: <see cref="HeatmapQuery.NeedsSheets"/>.</exception>
     public TilePool(HeatmapQuery query, BandPlan plan)
     {
         ArgumentNullException.ThrowIfNull(query);
@@ -36,75 +36,62 @@ public sealed class TilePool
         }
 
         this.query = query;
-        rows = new(plan, query.Layer);
-        votes = new(rows.Cells, query.Vote);
-        stations = new int[rows.Cells];
-        days = new int[rows.Cells];
-        stationSums = new long[rows.Cells];
-        stationDays = new int[rows.Cells];
-        stationMeans = new double[rows.Cells];
+        columns = new(plan, query.Layer);
+        votes = new(query, columns.Size, query.Statistic == Statistic.Sd);
+        stationDays = new int[columns.Size];
+        stationSums = new double[columns.Size];
     }
 
-    /// <summary>Adds all tiles of one station; once per station.</summary>
+    /// <summary>Adds all months of one station. A station is added once.</summary>
+    /// <param name="station">The station: its square and longitude count.</param>
+    /// <param name="months">Its tiles of the query's measure, one for each month, in any order.</param>
     public void Add(Station station, IReadOnlyList<(YearMonth Month, MonthTile Tile)> months)
     {
         ArgumentNullException.ThrowIfNull(station);
         ArgumentNullException.ThrowIfNull(months);
-        Array.Clear(stationSums);
+        if (months.Count == 1 && !votes.NeedsStationsOneByOne)
+        {
+            AddSingle(votes.PlanesOf(station), months[0].Tile, Copies(station, months[0]));
+            return;
+        }
+
         Array.Clear(stationDays);
-        foreach (var (month, tile) in months)
+        Array.Clear(stationSums);
+        foreach (var month in months)
         {
-            AddMonth(tile, query.Clock == HourClock.Solar ? SolarClock.Shift(station.Position.LongitudeDegrees, month) : 0);
-        }
-
-        var resolution = query.Measure.Info().Resolution;
-        for (var c = 0; c < stationMeans.Length; c++)
-        {
-            var count = stationDays[c];
-            if (count == 0 || count < query.MinDays)
+            foreach (var (source, target, length) in Copies(station, month))
             {
-                stationMeans[c] = double.NaN;
-                continue;
+                TileKernel.AddMonth(
+                    month.Tile.Days.Slice(source, length),
+                    month.Tile.Sums.Slice(source, length),
+                    stationDays.AsSpan(target, length),
+                    stationSums.AsSpan(target, length));
             }
-
-            stationMeans[c] = stationSums[c] * resolution / count;
-            stations[c]++;
-            days[c] += count;
         }
 
-        votes.Add(station, stationMeans);
+        votes.Add(station, stationDays, stationSums);
     }
 
-    /// <summary>The heatmap of everything added.</summary>
+    /// <summary>The heatmap of all that was added. Intervals are NaN. Call once.</summary>
     public Heatmap ToHeatmap()
     {
-        votes.Close();
-        return rows.ToHeatmap(
-            c => new(
-                query.Statistic == Statistic.Sd ? Math.Sqrt(votes.Variance(c)) : votes.Mean(c),
-                double.NaN,
-                double.NaN,
-                stations[c],
-                days[c]),
-            days);
+        votes.Count();
+        var steps = query.Measure.Info().StepsPerUnit;
+        return columns.Assemble(votes, cell =>
+        {
+            var value = query.Statistic == Statistic.Sd ? Math.Sqrt(votes.Variance(cell)) : votes.Mean(cell);
+            return new(value / steps, double.NaN, double.NaN, votes.Stations(cell), votes.Days(cell));
+        });
     }
 
-    private void AddMonth(MonthTile tile, int shift)
+    private void AddSingle(VotePlanes planes, MonthTile tile, ReadOnlySpan<RowCopy> copies)
     {
-        Span<int> rowOf = tile.BandCount <= 256 ? stackalloc int[tile.BandCount] : new int[tile.BandCount];
-        rows.Map(tile.BandIds, rowOf);
-        for (var hour = 0; hour < 24; hour++)
+        foreach (var (source, target, length) in copies)
         {
-            var source = hour * tile.BandCount;
-            var target = (hour + shift) % 24 * rows.Count;
-            for (var b = 0; b < rowOf.Length; b++)
-            {
-                if (rowOf[b] >= 0)
-                {
-                    stationSums[target + rowOf[b]] += tile.Sums[source + b];
-                    stationDays[target + rowOf[b]] += tile.Days[source + b];
-                }
-            }
+            TileKernel.AddMeans(tile.Days.Slice(source, length), tile.Sums.Slice(source, length), planes, target, query.MinDays);
         }
     }
+
+    private ReadOnlySpan<RowCopy> Copies(Station station, (YearMonth Month, MonthTile Tile) month) => columns.Copies(
+        month.Tile.BandIds, query.Clock == HourClock.Solar ? SolarClock.Shift(station.Position.LongitudeDegrees, month.Month) : 0);
 }

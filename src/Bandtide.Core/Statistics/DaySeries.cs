@@ -1,79 +1,67 @@
 namespace Bandtide.Core.Statistics;
 
-/// <summary>Variance of the mean of a short series of days whose neighbours resemble each other.</summary>
-public static class DaySeries
+/// <summary>Variance of a weighted mean of days of which neighbours resemble each other.</summary>
+/// <remarks>
+/// The days are deviations from the mean of their month, so that the course of a year is no uncertainty: the mean is
+/// that of such months. They follow a first-order autoregression of variance s2 and lag-1 correlation r
+/// (<see cref="DayMoments"/>). The variance of the weighted mean is s2 q with q = sum over all pairs of days of w w' r^distance, gaps
+/// included; s2 itself is the mean square over its expected share, 1 - q of each month.
+/// Degrees of freedom: 2 over the relative variance of the estimate, which for independent errors of s2 and r is
+/// 2/(n - months) + 4 f p/(p + assumed)^2, f = (1 + r)/(1 - r) being what correlation multiplies the variance by, p the pairs
+/// (first-order propagation from the variance of r, (1 - r^2)/p: Bartlett 1946, Journal of the Royal Statistical Society Supplement 8, 27-41).
+/// </remarks>
+internal static class DaySeries
 {
-    private const double LargestCorrelation = 0.9;
-
-    /// <summary>Variance of the mean and its degrees of freedom.</summary>
-    /// <param name="values">One per day in order of time, NaN where there is none; deviations from their mean or not.</param>
-    /// <param name="noiseVariance">Part of the values' variance that is independent from day to day and does not belong to the mean's variance; 0 for none.</param>
-    /// <returns>Variance 0 with under two days.</returns>
-    /// <remarks>
-    /// First-order autoregression. The lag-1 correlation is estimated over neighbouring dates and corrected for the bias that
-    /// subtracting the mean causes, -(1 + 3r)/n (Kendall 1954, Biometrika 41, 403-404; Marriott &amp; Pope, same issue). The mean of n days
-    /// has variance s2 f/n with f = 1 + 2 sum (1 - k/n) r^k, exact for a first-order autoregression; s2 is itself corrected for f
-    /// (its expectation is sigma2 (n - f)/(n - 1)). Degrees of freedom: n/f - 1, of as many independent days. Negative
-    /// correlation counts as none.
-    /// </remarks>
-    public static (double Variance, double DegreesOfFreedom) VarianceOfMean(ReadOnlySpan<double> values, double noiseVariance = 0)
+    /// <summary>Variance of the weighted mean and its degrees of freedom; unknown when no month has two days with a deviation.</summary>
+    public static MeanUncertainty Of(DaySpans days)
     {
-        var (count, sum) = (0, 0.0);
-        foreach (var value in values)
+        var moments = new DayMoments();
+        for (int start = 0, end; start < days.Days.Length; start = end)
         {
-            if (!double.IsNaN(value))
-            {
-                count++;
-                sum += value;
-            }
+            end = days.EndOfMonth(start);
+            moments.AddMonth(days[start..end]);
         }
 
-        if (count < 2)
+        if (moments.Freedom < 1)
         {
-            return (0, 0);
+            return MeanUncertainty.Unknown;
         }
 
-        var mean = sum / count;
-        var (squares, products, pairs, before) = (0.0, 0.0, 0, double.NaN);
-        foreach (var value in values)
+        var correlation = moments.Correlation;
+        var expected = 0.0;
+        for (int start = 0, end; start < days.Days.Length; start = end)
         {
-            var deviation = value - mean;
-            if (!double.IsNaN(deviation))
-            {
-                squares += deviation * deviation;
-                if (!double.IsNaN(before))
-                {
-                    products += deviation * before;
-                    pairs++;
-                }
-            }
-
-            before = deviation;
+            end = days.EndOfMonth(start);
+            var (weight, pairs) = Sums(days[start..end], correlation, deviatingOnly: true);
+            expected += weight > 0 ? weight - pairs / weight : 0;
         }
 
-        var signal = (squares / (count - 1)) - noiseVariance;
-        if (signal <= 0)
-        {
-            return (0, count - 1);
-        }
-
-        var raw = pairs == 0 ? 0 : products / pairs / (squares / count - noiseVariance is var variance && variance > 0 ? variance : signal);
-        var correlation = count <= 3 ? 0 : Math.Clamp(((count * raw) + 1) / (count - 3), 0, LargestCorrelation);
-        var inflation = Inflation(correlation, count);
-        inflation = Math.Min(inflation, count / 2.0);
-        return (signal * (count - 1) / (count - inflation) * inflation / count, Math.Max(1, (count / inflation) - 1));
+        var (total, all) = Sums(days, correlation, deviatingOnly: false);
+        var believed = moments.Pairs + DayMoments.AssumedPairs;
+        var relative = 1.0 / moments.Freedom + 2 * (1 + correlation) / (1 - correlation) * moments.Pairs / (believed * believed);
+        return new(moments.Squares / expected * all / (total * total), Math.Max(1, 1 / relative));
     }
 
-    /// <summary>How much larger the variance of a mean of n days is than of independent days.</summary>
-    public static double Inflation(double correlation, int count)
+    // Sum of the weights, and over all pairs of days of w w' r^distance. "Remembered" is the sum over the days before of w r^distance.
+    private static (double Weight, double Pairs) Sums(DaySpans days, double correlation, bool deviatingOnly)
     {
-        var (factor, power) = (1.0, 1.0);
-        for (var k = 1; k < count && power > 1e-6; k++)
+        var (remembered, total, pairs, last) = (0.0, 0.0, 0.0, 0);
+        for (var i = 0; i < days.Days.Length; i++)
         {
-            power *= correlation;
-            factor += 2 * (1 - ((double)k / count)) * power;
+            if (deviatingOnly && days.Counts[i] == 0)
+            {
+                continue;
+            }
+
+            var distance = days.Days[i] - last;
+            remembered *= distance == 1 ? correlation : Math.Pow(correlation, distance);
+            double weight = days.Weights[i];
+            pairs += weight * (2 * remembered + weight);
+            remembered += weight;
+            total += weight;
+            last = days.Days[i];
         }
 
-        return factor;
+        return (total, pairs);
     }
 }

@@ -1,17 +1,20 @@
 namespace Bandtide.Core.Statistics;
 
-/// <summary>Quantiles of Student's t distribution.</summary>
+/// <summary>Student's t distribution, with any real number of degrees of freedom.</summary>
 /// <remarks>
-/// Cumulative probability by the incomplete beta function (Abramowitz &amp; Stegun 1964, 26.7.1 and 26.5.8, continued
-/// fraction evaluated by Lentz's method), inverted by bisection.
+/// Cumulative probability by the incomplete beta function (Abramowitz and Stegun 1964, 26.7.1), inverted by safeguarded Newton
+/// steps; above 100,000 degrees of freedom the expansions 26.7.5 and 26.7.8 about the normal distribution.
 /// </remarks>
 public static class StudentT
 {
     private const int Steps = 2048;
 
-    // The 97.5 % point is smooth in 1/df, so a fine table serves any real number of degrees of freedom.
+    // From here on the distance to the normal distribution is a short series, which the beta function no longer resolves.
+    private const double ManyDegrees = 1e5;
+
+    // The 97.5 % point is smooth in 1/df, so a fine table serves any number of degrees of freedom: error under 1e-5.
     private static readonly Lazy<double[]> Upper975 = new(() =>
-        [.. Enumerable.Range(0, Steps + 1).Select(i => Quantile(0.975, i == 0 ? 1e9 : (double)Steps / i))]);
+        [.. Enumerable.Range(0, Steps + 1).Select(i => i == 0 ? Normal.Quantile(0.975) : Quantile(0.975, (double)Steps / i))]);
 
     /// <summary>The 97.5 % point: half a 95 % interval in standard errors.</summary>
     /// <param name="degreesOfFreedom">At least 1 (smaller is taken as 1); infinity gives 1.960.</param>
@@ -20,89 +23,75 @@ public static class StudentT
         var place = Steps / Math.Max(1, degreesOfFreedom);
         var below = Math.Min((int)place, Steps - 1);
         var table = Upper975.Value;
-        return table[below] + ((place - below) * (table[below + 1] - table[below]));
+        return table[below] + (place - below) * (table[below + 1] - table[below]);
     }
 
     /// <summary>The t that a share <paramref name="probability"/> of the distribution lies below.</summary>
-    /// <param name="probability">Above 0.5, below 1.</param>
-    /// <param name="degreesOfFreedom">Above 0.</param>
+    /// <param name="probability">Above 0 and below 1.</param>
+    /// <param name="degreesOfFreedom">Above 0; infinity is the normal distribution.</param>
     /// <exception cref="ArgumentOutOfRangeException">Outside these.</exception>
     public static double Quantile(double probability, double degreesOfFreedom)
     {
-        ArgumentOutOfRangeException.ThrowIfLessThanOrEqual(probability, 0.5);
+        ArgumentOutOfRangeException.ThrowIfNegativeOrZero(probability);
         ArgumentOutOfRangeException.ThrowIfGreaterThanOrEqual(probability, 1);
         ArgumentOutOfRangeException.ThrowIfNegativeOrZero(degreesOfFreedom);
-        var (low, high) = (0.0, 1.0);
-        while (Cumulative(high, degreesOfFreedom) < probability)
+        if (degreesOfFreedom > ManyDegrees)
         {
-            high *= 2;
+            return Expanded(Normal.Quantile(probability), degreesOfFreedom);
         }
 
-        for (var i = 0; i < 100 && high - low > 1e-13 * high; i++)
-        {
-            var middle = (low + high) / 2;
-            (low, high) = Cumulative(middle, degreesOfFreedom) < probability ? (middle, high) : (low, middle);
-        }
-
-        return (low + high) / 2;
+        var tail = Math.Min(probability, 1 - probability);
+        var t = Invert(tail, degreesOfFreedom);
+        return probability < 0.5 ? -t : t;
     }
 
-    /// <summary>Share of the distribution below t, for t of 0 or more.</summary>
+    /// <summary>Share of the distribution below t.</summary>
+    /// <param name="t">Any.</param>
+    /// <param name="degreesOfFreedom">Above 0; infinity is the normal distribution.</param>
     public static double Cumulative(double t, double degreesOfFreedom) =>
-        1 - (0.5 * IncompleteBeta(degreesOfFreedom / (degreesOfFreedom + (t * t)), t * t / (degreesOfFreedom + (t * t)), degreesOfFreedom / 2, 0.5));
+        degreesOfFreedom > ManyDegrees ? Normal.Cumulative(t * (1 - 1 / (4 * degreesOfFreedom)) / Math.Sqrt(1 + t * t / (2 * degreesOfFreedom)))
+        : t < 0 ? Tail(-t, degreesOfFreedom)
+        : 1 - Tail(t, degreesOfFreedom);
 
-    // I_x(a, b), with y = 1 - x given apart because it may be tiny.
-    private static double IncompleteBeta(double x, double y, double a, double b)
+    private static double Expanded(double z, double df) =>
+        z + z * (z * z + 1) / (4 * df) + z * (z * z * (5 * z * z + 16) + 3) / (96 * df * df);
+
+    private static double Tail(double t, double df)
     {
-        if (x <= 0 || y <= 0)
-        {
-            return x <= 0 ? 0 : 1;
-        }
-
-        var front = Math.Exp(LogGamma(a + b) - LogGamma(a) - LogGamma(b) + (a * Math.Log(x)) + (b * Math.Log(y)));
-        return x < (a + 1) / (a + b + 2)
-            ? front * Fraction(x, a, b) / a
-            : 1 - (front * Fraction(y, b, a) / b);
+        var square = t * t;
+        return 0.5 * SpecialFunctions.IncompleteBeta(df / (df + square), square / (df + square), df / 2, 0.5);
     }
 
-    private static double Fraction(double x, double a, double b)
+    // Newton on the logarithm of the tail over the logarithm of t, along which it is almost straight; halving where a step leaves the bracket.
+    private static double Invert(double tail, double df)
     {
-        const double tiny = 1e-300;
-        var (c, d) = (1.0, 1 / NotZero(1 - ((a + b) * x / (a + 1))));
-        var result = d;
-        for (var m = 1; m <= 10_000; m++)
+        if (tail == 0.5)
         {
-            var even = m * (b - m) * x / ((a + (2 * m) - 1) * (a + (2 * m)));
-            d = 1 / NotZero(1 + (even * d));
-            c = NotZero(1 + (even / c));
-            result *= d * c;
-            var odd = -(a + m) * (a + b + m) * x / ((a + (2 * m)) * (a + (2 * m) + 1));
-            d = 1 / NotZero(1 + (odd * d));
-            c = NotZero(1 + (odd / c));
-            var step = d * c;
-            result *= step;
-            if (Math.Abs(step - 1) < 1e-15)
+            return 0;
+        }
+
+        var (low, high) = (0.0, 1.0);
+        while (Tail(high, df) > tail)
+        {
+            (low, high) = (high, 2 * high);
+        }
+
+        var logScale = SpecialFunctions.LogGamma((df + 1) / 2) - SpecialFunctions.LogGamma(df / 2) - 0.5 * Math.Log(df * Math.PI);
+        var t = (low + high) / 2;
+        for (var i = 0; i < 200 && high - low > 1e-15 * high; i++)
+        {
+            var above = Tail(t, df);
+            (low, high) = above > tail ? (t, high) : (low, t);
+            var slope = -t * Math.Exp(logScale - (df + 1) / 2 * Math.Log(1 + t * t / df)) / above;
+            var next = t * Math.Exp((Math.Log(tail) - Math.Log(above)) / slope);
+            if (Math.Abs(next - t) <= 1e-15 * t)
             {
-                break;
+                return next;
             }
+
+            t = next > low && next < high ? next : (low + high) / 2;
         }
 
-        return result;
-
-        static double NotZero(double value) => Math.Abs(value) < tiny ? tiny : value;
-    }
-
-    // Stirling's series after shifting the argument above 10 (Abramowitz & Stegun 6.1.41); error under 1e-13.
-    private static double LogGamma(double x)
-    {
-        var shift = 0.0;
-        while (x < 10)
-        {
-            shift += Math.Log(x++);
-        }
-
-        var s = 1 / (x * x);
-        return ((x - 0.5) * Math.Log(x)) - x + (0.5 * Math.Log(2 * Math.PI))
-            + ((1.0 / 12 - (s * (1.0 / 360 - (s * (1.0 / 1260 - (s * (1.0 / 1680 - (s / 1188)))))))) / x) - shift;
+        return t;
     }
 }

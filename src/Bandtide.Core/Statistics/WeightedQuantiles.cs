@@ -5,7 +5,7 @@ public static class WeightedQuantiles
 {
     /// <summary>The quantile that is linear between the midpoints of cumulative weight.</summary>
     /// <param name="probability">0 to 1.</param>
-    /// <param name="values">At least one, in ascending order.</param>
+    /// <param name="values">At least one, in ascending order; equal ones in ascending order of weight, so that the result does not depend on chance.</param>
     /// <param name="weights">As many, positive, any scale.</param>
     /// <returns>A value between the least and the largest; beyond the outermost midpoints the outermost values.</returns>
     /// <remarks>

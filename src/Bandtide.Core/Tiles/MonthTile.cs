@@ -54,61 +54,23 @@ public sealed class MonthTile
     public static MonthTile? FromSheets(Measure measure, IReadOnlyCollection<CellGrid> sheets)
     {
         ArgumentNullException.ThrowIfNull(sheets);
-        var bands = BandsWith(measure, sheets);
-        if (bands.Length == 0)
-        {
-            return null;
-        }
-
-        var counts = new byte[24 * bands.Length];
-        var totals = new int[counts.Length];
-        Span<int> scratch = new int[sheets.Max(sheet => sheet.Plane(Quantity.Sweeps).Length)];
+        var builder = new MonthTileBuilder(sheets);
+        int[] scratch = [];
         foreach (var sheet in sheets)
         {
-            var values = Measures.Values(sheet, measure, scratch);
-            if (values.IsEmpty)
+            var size = sheet.BandCount * CellGrid.Hours;
+            if (measure.Info().IsDifference && scratch.Length < size)
             {
-                continue;
+                scratch = new int[size];
             }
 
-            for (var b = 0; b < sheet.BandCount; b++)
+            var values = Measures.Values(sheet, measure, scratch);
+            if (!values.IsEmpty)
             {
-                var target = Array.BinarySearch(bands, sheet.BandIds[b]);
-                if (target < 0)
-                {
-                    continue;
-                }
-
-                for (var (i, j) = (b, target); i < values.Length; i += sheet.BandCount, j += bands.Length)
-                {
-                    if (values[i] != CellGrid.Missing)
-                    {
-                        counts[j]++;
-                        totals[j] += values[i];
-                    }
-                }
+                builder.Add(sheet, values);
             }
         }
 
-        return new(bands, counts, totals);
-    }
-
-    private static short[] BandsWith(Measure measure, IReadOnlyCollection<CellGrid> sheets)
-    {
-        var found = new SortedSet<short>();
-        foreach (var sheet in sheets)
-        {
-            Span<int> scratch = measure == Measure.Excess ? new int[sheet.Plane(Quantity.Sweeps).Length] : default;
-            var values = Measures.Values(sheet, measure, scratch);
-            for (var i = 0; i < values.Length; i++)
-            {
-                if (values[i] != CellGrid.Missing)
-                {
-                    found.Add(sheet.BandIds[i % sheet.BandCount]);
-                }
-            }
-        }
-
-        return [.. found];
+        return builder.Build();
     }
 }
