@@ -40,24 +40,25 @@ internal sealed class BenchServer : IAsyncDisposable
 
     public static async Task<BenchServer> StartAsync(StoreKind kind, string? connectionString = null, params string[] arguments)
     {
-        var folder = Directory.CreateTempSubdirectory("bandtide-bench-").FullName;
+        var place = Directory.CreateTempSubdirectory("bandtide-bench-").FullName;
         var configuration = Path.GetFileName(AppContext.BaseDirectory.TrimEnd(Path.DirectorySeparatorChar));
         var program = Path.GetFullPath(Path.Combine(AppContext.BaseDirectory, "..", "..", "Bandtide.Server", configuration, "Bandtide.Server.dll"));
         var start = new ProcessStartInfo("dotnet", [program, "--urls", "http://127.0.0.1:0", .. arguments])
         {
-            WorkingDirectory = folder,
+            WorkingDirectory = place,
             RedirectStandardOutput = true,
+            UseShellExecute = false,
         };
         start.Environment["Setup__CoordinatorKey"] = Key;
         start.Environment["Storage__Provider"] = kind == StoreKind.Sqlite ? "sqlite" : "postgres";
         start.Environment["ConnectionStrings__Bandtide"] = connectionString;
-        var process = Process.Start(start) ?? throw new InvalidOperationException("The server did not start.");
-        while (await process.StandardOutput.ReadLineAsync() is { } line)
+        var started = Process.Start(start) ?? throw new InvalidOperationException("The server did not start.");
+        while (await started.StandardOutput.ReadLineAsync() is { } line)
         {
             if (line.StartsWith("Bandtide is at ", StringComparison.Ordinal))
             {
-                _ = Task.Run(process.StandardOutput.ReadToEndAsync);
-                return new(process, folder, new Uri(line["Bandtide is at ".Length..]));
+                _ = Task.Run(started.StandardOutput.ReadToEndAsync);
+                return new(started, place, new Uri(line["Bandtide is at ".Length..]));
             }
         }
 

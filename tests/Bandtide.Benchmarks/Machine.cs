@@ -22,7 +22,7 @@ internal static class Machine
 
     private static string Commit()
     {
-        using var git = Process.Start(new ProcessStartInfo("git", ["rev-parse", "--short", "HEAD"]) { RedirectStandardOutput = true, WorkingDirectory = AppContext.BaseDirectory });
+        using var git = Process.Start(new ProcessStartInfo("git", ["rev-parse", "--short", "HEAD"]) { RedirectStandardOutput = true, UseShellExecute = false, WorkingDirectory = AppContext.BaseDirectory });
         return git?.StandardOutput.ReadToEnd().Trim() ?? "unknown";
     }
 }
