@@ -85,7 +85,8 @@ internal sealed class PlainPool(HeatmapQuery query, RandomNetwork network)
         {
             Measure.Occupancy => Read(Quantity.Occupancy, 10_000),
             Measure.Signal => Read(Quantity.Signal, 100),
-            Measure.Excess => Read(Quantity.Signal, 100) - Read(Quantity.Floor, 100),
+            // Rounded to its resolution, so that equal differences are equal numbers.
+            Measure.Excess => Read(Quantity.Signal, 100) - Read(Quantity.Floor, 100) is { } excess ? Math.Round(excess, 2) : null,
             Measure.Level => Read(Quantity.Level, 100),
             Measure.LevelP90 => Read(Quantity.LevelP90, 100),
             Measure.Floor => Read(Quantity.Floor, 100),
