@@ -1,4 +1,5 @@
 using Bandtide.Server.Components.Hours;
+using Bandtide.Server.Components.Overview;
 
 namespace Bandtide.Server.Components;
 
@@ -12,6 +13,7 @@ internal static class PagesSetup
         services.AddSingleton<PageHandover>();
         services.AddSingleton<SiteFacts>();
         services.AddSingleton<HoursReader>();
+        services.AddSingleton<StationReader>();
         services.AddExceptionHandler<PageFaultHandler>();
         return services;
     }
@@ -21,7 +23,7 @@ internal static class PagesSetup
     {
         app.UseWhen(
             context => !context.Request.Path.StartsWithSegments("/api", StringComparison.Ordinal),
-            pages => pages.UseStatusCodePagesWithReExecute("/not-found", createScopeForStatusCodePages: true));
+            pages => pages.UseStatusCodePagesWithReExecute("/not-found"));
         return app;
     }
 

@@ -9,8 +9,10 @@ internal static class HeatmapHeadSvg
     private const int StripHeight = 9;
     private const int HourBaseline = 50;
 
-    // Texts of two lines nearer than this many hours would touch on a narrow page.
-    private const double ClosestLabels = 7;
+    // In hours, on a narrow page: the width of a text, and from where on it has room on either side.
+    private const double TextHours = 7.5;
+    private const double LeftRoom = 3;
+    private const double RightRoom = 20.5;
 
     /// <summary>Writes the head, in the coordinates of the plot.</summary>
     public static void Write(SvgWriter svg, HeatmapFigure figure)
@@ -73,18 +75,25 @@ internal static class HeatmapHeadSvg
         svg.Add($"""<rect class="fig-frame" y="{StripTop}" width="100%" height="{StripHeight}" fill="none" stroke="{Ink.Black}" stroke-width="0.75"/>""");
     }
 
+    // Texts stand on the outer side of their lines where there is room; on a narrow page one is as wide as seven columns.
     private static void SunTimes(SvgWriter svg, Daylight daylight)
     {
-        if (daylight is { RiseHour: { } rise, SetHour: { } set } && Math.Abs(rise - set) is >= ClosestLabels and <= 24 - ClosestLabels / 2)
+        if (daylight is not { RiseHour: { } rise, SetHour: { } set })
         {
-            SunTime(svg, rise, "sunrise");
-            SunTime(svg, set, "sunset");
+            return;
         }
+
+        var (earlier, later) = (Math.Min(rise, set), Math.Max(rise, set));
+        if ((earlier < LeftRoom && later < LeftRoom + TextHours) || (later > RightRoom && earlier > RightRoom - TextHours))
+        {
+            return;
+        }
+
+        var (left, right) = rise <= set ? ("sunrise", "sunset") : ("sunset", "sunrise");
+        SunTime(svg, earlier, left, earlier < LeftRoom ? "start" : "end");
+        SunTime(svg, later, right, later > RightRoom ? "end" : later > 24 - TextHours ? "middle" : "start");
     }
 
-    private static void SunTime(SvgWriter svg, double hour, string name)
-    {
-        var anchor = hour switch { < 3.5 => "start", > 20.5 => "end", _ => "middle" };
+    private static void SunTime(SvgWriter svg, double hour, string name, string anchor) =>
         svg.Add($"""<text class="fig-sun-time" x="{HeatmapSvg.Percent(hour)}%" y="16" text-anchor="{anchor}" fill="{Ink.Second}">{name} {FigureWords.ClockTime(hour)}</text>""");
-    }
 }

@@ -31,12 +31,6 @@ public sealed partial class HoursForm : ComponentBase
 
     private bool HasFineChoices => FineChoices.Any(name => Address.Value(name) is not null);
 
-    // Squares are many and small: only the one shown is offered.
-    private IEnumerable<Region> Regions => Network.Regions
-        .Where(region => region.Kind != RegionKind.Square || string.Equals(region.Code, Address.Value("region"), StringComparison.Ordinal))
-        .OrderBy(region => region.Kind switch { RegionKind.Everything => 0, RegionKind.List or RegionKind.Locators => 1, RegionKind.ItuRegion => 2, _ => 3 })
-        .ThenBy(region => region.Name, StringComparer.Ordinal);
-
     private YearMonth Last => Address.Query?.Period switch
     {
         Period.Months months => months.To,
@@ -62,6 +56,8 @@ public sealed partial class HoursForm : ComponentBase
     private string Of(Period period) => HoursAddress.Of((Address.Query ?? new HeatmapQuery(null, "all", period)) with { Period = period }, Address.Shown);
 
     private void Change(string name, ChangeEventArgs change) => Changed(Address.With(name, change.Value as string).Canonical);
+
+    private void ChangePlace(string place) => Changed(Address.With(HoursAddress.Place, place).Canonical);
 
     // Every change is shown already; the button is for those who look for one.
     private void Submit() => Changed(Address.Canonical);
