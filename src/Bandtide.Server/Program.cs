@@ -1,12 +1,15 @@
 using Bandtide.Server.Api;
 using Bandtide.Server.Components;
+using Bandtide.Server.Demo;
 using Bandtide.Server.Hosting;
 using Bandtide.Server.Security;
 using Bandtide.Storage;
 using Bandtide.Storage.Maintenance;
 
-// The program's folder holds wwwroot and appsettings wherever the command is typed.
-var builder = WebApplication.CreateBuilder(new WebApplicationOptions { Args = args, ContentRootPath = AppContext.BaseDirectory });
+// The program's folder holds wwwroot and appsettings wherever the command is typed. A switch without a value is kept from
+// the configuration, which would take the next argument for its value.
+var isDemonstration = args.Contains("--demo", StringComparer.Ordinal);
+var builder = WebApplication.CreateBuilder(new WebApplicationOptions { Args = [.. args.Where(arg => arg is not "--demo")], ContentRootPath = AppContext.BaseDirectory });
 builder.WebHost.UseStaticWebAssets();
 builder.WebHost.UseDefaultUrl(builder.Configuration);
 var store = StoreSettings.Read(builder.Configuration);
@@ -33,6 +36,10 @@ app.MapSetupPage();
 app.MapPages();
 
 await maintenance.MigrateAsync(app.Lifetime.ApplicationStopping);
+if (isDemonstration)
+{
+    await ActivatorUtilities.CreateInstance<DemoLoader>(app.Services, Console.Out).LoadAsync(app.Lifetime.ApplicationStopping);
+}
 
 var link = await app.Services.GetRequiredService<FirstCoordinator>().PrepareAsync(app.Lifetime.ApplicationStopping);
 await app.StartAsync();
