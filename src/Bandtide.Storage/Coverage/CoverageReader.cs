@@ -79,15 +79,14 @@ public sealed class CoverageReader
         }
     }
 
-    // Each station is looked up by itself in the index; no two stations' rows meet.
+    // Each station is looked up by itself in the index; no two stations' rows meet. CROSS JOIN keeps SQLite to this order.
     private static async Task<List<(int Station, int Date, long ReceivedAt)>> NewestAsync(StoreSession session, int latest, CancellationToken ct)
     {
         await using var command = session.Command(
             """
-            SELECT day.station_id, day.date, day.received_at
-            FROM (SELECT id, (SELECT max(date) FROM day_sheet WHERE station_id = station.id AND cell_count > 0 AND date <= @latest) AS newest
-                  FROM station) AS last
-            JOIN day_sheet AS day ON day.station_id = last.id AND day.date = last.newest
+            SELECT day.station_id, day.date, day.received_at FROM station CROSS JOIN day_sheet AS day
+            WHERE day.station_id = station.id
+            AND day.date = (SELECT max(date) FROM day_sheet WHERE station_id = station.id AND cell_count > 0 AND date <= @latest)
             """);
         command.Add("@latest", latest);
         return await command.ListAsync(row => (row.GetInt32(0), row.GetInt32(1), row.GetInt64(2)), ct);
