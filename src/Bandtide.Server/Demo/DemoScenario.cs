@@ -10,7 +10,7 @@ internal static class DemoScenario
     public const string Key = "demonstration-key-for-this-machine-only";
 
     /// <summary>First date with data.</summary>
-    public static readonly DateOnly FirstDate = new(2023, 1, 1);
+    public static readonly DateOnly FirstDate = new(2023, 10, 1);
 
     /// <summary>Lists that the club's coordinator has drawn up.</summary>
     public static IReadOnlyList<(string Code, string Name, string[] Stations)> Lists { get; } =

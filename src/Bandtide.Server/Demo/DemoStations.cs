@@ -82,7 +82,7 @@ internal static class DemoStations
         {
             Code = "mango-court", Name = "Mango Court", Place = new(-8.21, -35.62), Unit = LevelUnit.DbFullScale, Environment = "residential", GainDb = 30,
             SensitivityDb = -1, RevisitSeconds = 30, ReportsSteady = false,
-            Setups = [Told("residential", 30, 500, null, "Dongle, direct sampling", "Wire on the roof, 9 m", null, new(2023, 5, 20))],
+            Setups = [Told("residential", 30, 500, null, "Dongle, direct sampling", "Wire on the roof, 9 m", null, new(2024, 1, 20))],
             Faults = new() { FailuresPerYear = 5 },
         },
         new()
