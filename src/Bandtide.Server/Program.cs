@@ -25,6 +25,7 @@ if (StoreCommands.Of(args) is not null)
 app.UseExceptionHandler();
 app.UseSecurityHeaders();
 app.UsePages();
+app.UseHeadRequests();
 app.UseRouting();
 app.UseApi();
 app.UseAntiforgery();

@@ -13,15 +13,20 @@ internal static class SecurityHeaders
     // The hash is that of the empty style element that the plotting script adds.
     private const string StrictStyles = "style-src-elem 'self' 'sha256-47DEQpj8HBSa+/TImW+5JCeuQeRkm5NMpJWZG3hSuFU='; ";
 
+    // Numbers need nothing.
+    private const string DataPolicy = "default-src 'none'; frame-ancestors 'none'";
+
     public static IApplicationBuilder UseSecurityHeaders(this IApplicationBuilder app) => app.Use((context, next) =>
     {
         var headers = context.Response.Headers;
         headers.XContentTypeOptions = "nosniff";
         headers["Referrer-Policy"] = "same-origin";
         headers["Permissions-Policy"] = "geolocation=(), camera=(), microphone=()";
-        headers.ContentSecurityPolicy = string.Format(
-            System.Globalization.CultureInfo.InvariantCulture, Policy, context.RequestServices.GetRequiredService<ScriptNonce>().Value,
-            context.Request.Path.StartsWithSegments("/reference", StringComparison.Ordinal) ? OwnStyles : StrictStyles);
-        return next();
+        headers.ContentSecurityPolicy = context.Request.Path.StartsWithSegments("/api", StringComparison.Ordinal) ? DataPolicy : PagePolicy(context);
+        return next(context);
     });
+
+    private static string PagePolicy(HttpContext context) => string.Format(
+        System.Globalization.CultureInfo.InvariantCulture, Policy, context.RequestServices.GetRequiredService<ScriptNonce>().Value,
+        context.Request.Path.StartsWithSegments("/reference", StringComparison.Ordinal) ? OwnStyles : StrictStyles);
 }
