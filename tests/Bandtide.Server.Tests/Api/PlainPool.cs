@@ -41,7 +41,8 @@ internal sealed class PlainPool(IReadOnlyList<(string Station, string Vote, Json
         double? Number(string name) => cell[name]?.GetValue<double>();
         return measure switch
         {
-            "excess" => Number("signal") - Number("floor"),
+            // Rounded, so that equal differences are equal.
+            "excess" => Number("signal") is { } signal && Number("floor") is { } floor ? Math.Round(signal - floor, 2) : null,
             "level-p90" => Number("levelP90"),
             _ => Number(measure),
         };
