@@ -108,13 +108,8 @@ public sealed class ServerProcess : IAsyncDisposable
         string folder, IEnumerable<(string Key, string Value)> settings, params string[] arguments)
     {
         await using var program = Start(folder, settings, arguments);
-        var output = new StringBuilder();
-        await foreach (var line in program.lines.Reader.ReadAllAsync(HttpSteps.Ct))
-        {
-            output.AppendLine(line);
-        }
-
-        return (await program.EndAsync(), output.ToString(), program.Errors);
+        var output = await program.RestAsync();
+        return (await program.EndAsync(), output, program.Errors);
     }
 
     /// <summary>The next line of standard output that is meant.</summary>
@@ -137,6 +132,18 @@ public sealed class ServerProcess : IAsyncDisposable
         }
 
         throw new InvalidOperationException($"The program has not said what was waited for. {Errors}");
+    }
+
+    /// <summary>Everything it says from now on until it ends.</summary>
+    public async Task<string> RestAsync()
+    {
+        var rest = new StringBuilder();
+        await foreach (var line in lines.Reader.ReadAllAsync(HttpSteps.Ct))
+        {
+            rest.AppendLine(line);
+        }
+
+        return rest.ToString();
     }
 
     /// <summary>A client with a key, or none.</summary>
