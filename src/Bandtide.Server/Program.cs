@@ -1,51 +1,14 @@
-using Bandtide.Server.Api;
-using Bandtide.Server.Components;
-using Bandtide.Server.Demo;
 using Bandtide.Server.Hosting;
-using Bandtide.Server.Security;
-using Bandtide.Storage;
-using Bandtide.Storage.Maintenance;
 
-// The program's folder holds wwwroot and appsettings wherever the command is typed. A switch without a value is kept from
-// the configuration, which would take the next argument for its value.
-var isDemonstration = args.Contains("--demo", StringComparer.Ordinal);
-var builder = WebApplication.CreateBuilder(new WebApplicationOptions { Args = [.. args.Where(arg => arg is not "--demo")], ContentRootPath = AppContext.BaseDirectory });
-builder.WebHost.UseStaticWebAssets();
-builder.WebHost.UseDefaultUrl(builder.Configuration);
-var store = StoreSettings.Read(builder.Configuration);
-builder.Services.AddBandtideStorage(store);
-builder.Services.AddHosting(store.DataDirectory);
-builder.Services.AddApi();
-builder.Services.AddPages();
-
-await using var app = builder.Build();
-var maintenance = app.Services.GetRequiredService<StoreMaintenance>();
-if (StoreCommands.Of(args) is not null)
+try
 {
-    return await StoreCommands.RunAsync(args, maintenance, CancellationToken.None);
+    return await ServerProgram.RunAsync(ServerArguments.Parse(args));
 }
-
-app.UseExceptionHandler();
-app.UseSecurityHeaders();
-app.UsePages();
-app.UseRouting();
-app.UseApi();
-app.UseAntiforgery();
-app.MapApi();
-app.MapSetupPage();
-app.MapPages();
-
-await maintenance.MigrateAsync(app.Lifetime.ApplicationStopping);
-if (isDemonstration)
+catch (Exception failure) when (StartFailure.Describe(failure) is { } sentence)
 {
-    await ActivatorUtilities.CreateInstance<DemoLoader>(app.Services, Console.Out).LoadAsync(app.Lifetime.ApplicationStopping);
+    Console.Error.WriteLine(sentence);
+    return 1;
 }
-
-var link = await app.Services.GetRequiredService<FirstCoordinator>().PrepareAsync(app.Lifetime.ApplicationStopping);
-await app.StartAsync();
-app.Announce(link);
-await app.WaitForShutdownAsync();
-return 0;
 
 /// <summary>The program; tests start it by this name.</summary>
 public partial class Program;

@@ -73,6 +73,11 @@ public sealed class BulkCsvReader(SheetContext context) : IBulkReader
                 EndDay(completed);
             }
         }
+        else if (!Stopped && day is not null)
+        {
+            day.Problems.Add(line, "", SheetRule.BodyIncomplete, BulkLimits.Incomplete);
+            EndDay(completed);
+        }
 
         Stopped = true;
     }

@@ -39,9 +39,16 @@ public sealed class BulkJsonReader(SheetContext context) : IBulkReader
     public void Finish(bool endedProperly, ICollection<BulkDay> completed)
     {
         ArgumentNullException.ThrowIfNull(completed);
-        if (endedProperly && !Stopped && !skipping)
+        if (!Stopped && !skipping)
         {
-            ReadLine(pending.Unread, completed);
+            if (endedProperly)
+            {
+                ReadLine(pending.Unread, completed);
+            }
+            else if (!pending.Unread.IsEmpty)
+            {
+                completed.Add(Refused(pending.Unread, pending.Unread, SheetRule.BodyIncomplete, "", BulkLimits.Incomplete));
+            }
         }
 
         Stopped = true;

@@ -1,5 +1,4 @@
 using System.Text.Json.Nodes;
-using Bandtide.Core.Heatmaps;
 using Bandtide.Server.Security;
 using Microsoft.AspNetCore.OpenApi;
 using Microsoft.OpenApi;
@@ -10,6 +9,20 @@ namespace Bandtide.Server.Api;
 internal static class ApiDescription
 {
     private const string KeyScheme = "key";
+    private const string Json = "application/json";
+
+    private static readonly OpenApiSchema Text = new() { Type = JsonSchemaType.String };
+
+    private static readonly (string Name, string Description)[] TagTexts =
+    [
+        ("Bands", "The band plan, the same for every station."),
+        ("Regions", "Named sets of stations."),
+        ("Stations", "Receivers and what was connected to them."),
+        ("Keys", "A station's keys: made, listed without their text, revoked."),
+        ("Days", "Day sheets: what a station reports for one UTC date, with every revision."),
+        ("Heatmap", "Hour-by-band values pooled over stations and days."),
+        ("Coverage", "Who reported when."),
+    ];
 
     public static void Configure(OpenApiOptions options)
     {
@@ -19,9 +32,10 @@ internal static class ApiDescription
             {
                 Title = "Bandtide",
                 Version = "v1",
-                Description = "Hour-by-hour short-wave band occupancy, pooled across stations. Times are UTC. Errors are problem details (RFC 9457) that name line, field and rule. Not for safety-of-life planning.",
+                Description = "Hour-by-hour short-wave band occupancy, pooled across stations. Times are UTC. Errors are problem details (RFC 9457) that name line, field and rule. What may be wrong is judged in this order: 401, 404, 403, 415 or 413, 406, 400. Not for safety-of-life planning.",
             };
             document.Servers = [];
+            document.Tags = TagTexts.Select(tag => new OpenApiTag { Name = tag.Name, Description = tag.Description }).ToHashSet();
             var components = document.Components ??= new();
             components.SecuritySchemes ??= new Dictionary<string, IOpenApiSecurityScheme>(StringComparer.Ordinal);
             components.SecuritySchemes[KeyScheme] = new OpenApiSecurityScheme
@@ -32,21 +46,39 @@ internal static class ApiDescription
             };
             return Task.CompletedTask;
         });
-        options.AddOperationTransformer(async (operation, context, ct) =>
+        options.AddSchemaTransformer(ApiSchemas.CompleteAsync);
+        options.AddOperationTransformer(CompleteAsync);
+    }
+
+    private static async Task CompleteAsync(OpenApiOperation operation, OpenApiOperationTransformerContext context, CancellationToken ct)
+    {
+        var notes = context.Description.ActionDescriptor.EndpointMetadata;
+        if (notes.OfType<NeedsKey>().Any())
         {
-            if (context.Description.ActionDescriptor.EndpointMetadata.OfType<NeedsKey>().Any())
+            operation.Security = [new() { [new OpenApiSecuritySchemeReference(KeyScheme, context.Document)] = [] }];
+        }
+
+        if (notes.OfType<BodyNote>().FirstOrDefault() is { } body)
+        {
+            operation.RequestBody = await BodyAsync(body, context, ct);
+        }
+
+        ApiParameters.Complete(operation);
+        foreach (var (status, response) in (operation.Responses ?? []).Where(entry => entry.Value is OpenApiResponse).Select(entry => (entry.Key, (OpenApiResponse)entry.Value)))
+        {
+            foreach (var (type, media) in (response.Content ?? new Dictionary<string, OpenApiMediaType>(StringComparer.Ordinal)).ToList())
             {
-                operation.Security = [new() { [new OpenApiSecuritySchemeReference(KeyScheme, context.Document)] = [] }];
+                if (type is not (Json or Problems.ContentType))
+                {
+                    media.Schema = Text;
+                }
             }
 
-            if (context.Description.ActionDescriptor.EndpointMetadata.OfType<BodyNote>().FirstOrDefault() is { } body)
-            {
-                operation.RequestBody = await BodyAsync(body, context, ct);
-            }
+            response.Description = ApiExamples.StatusText(status) ?? response.Description;
+            ApiHeaders.Add(response, operation.OperationId ?? "", status);
+        }
 
-            AddParameters(operation);
-            AddExamples(operation);
-        });
+        AddExamples(operation);
     }
 
     private static async Task<OpenApiRequestBody> BodyAsync(BodyNote body, OpenApiOperationTransformerContext context, CancellationToken ct)
@@ -56,27 +88,8 @@ internal static class ApiDescription
         {
             Required = true,
             Content = body.MediaTypes.ToDictionary(
-                type => type,
-                type => new OpenApiMediaType { Schema = type is "application/json" ? shape : new OpenApiSchema { Type = JsonSchemaType.String } },
-                StringComparer.Ordinal),
+                type => type, type => new OpenApiMediaType { Schema = type is Json ? shape : Text }, StringComparer.Ordinal),
         };
-    }
-
-    private static void AddParameters(OpenApiOperation operation)
-    {
-        if (string.Equals(operation.OperationId, "getHeatmap", StringComparison.Ordinal))
-        {
-            operation.Parameters = [.. ApiParameters.Heatmap];
-        }
-
-        foreach (var parameter in (operation.Parameters ?? []).OfType<OpenApiParameter>())
-        {
-            if (ApiParameters.Known.TryGetValue(parameter.Name ?? "", out var known))
-            {
-                parameter.Description ??= known.Description;
-                parameter.Example ??= JsonValue.Create(known.Example);
-            }
-        }
     }
 
     private static void AddExamples(OpenApiOperation operation)
@@ -95,8 +108,6 @@ internal static class ApiDescription
                     ? ApiExamples.Problem(status)
                     : ApiExamples.Response(id, type);
             }
-
-            response.Description = ApiExamples.StatusText(status) ?? response.Description;
         }
     }
 }

@@ -50,7 +50,7 @@ internal static class ApiExamples
         ["listDays"] = """[{"date":"2026-06-01","revision":1,"checksum":"2c1f0e3b5d7a9c8e0f1a2b3c4d5e6f70","cells":1}]""",
         ["listRevisions"] = """[{"revision":1,"receivedAt":"2026-06-02T00:10:00+00:00","status":"stored","cells":1,"checksum":"2c1f0e3b5d7a9c8e0f1a2b3c4d5e6f70"}]""",
         ["getCoverage"] = """{"from":"2026-06-01","to":"2026-06-30","dates":["2026-06-01"],"stations":["north-hut"],"hours":[[1]],"cells":[[1]],"bands":[[1]],"revision":"9f2c"}""",
-        ["getHeatmap"] = $$"""{"measure":"occupancy","unit":"1","stat":"mean","clock":"utc","hours":[{{Hours}}],"bands":["bc-49m"],"values":[[{{Repeat("0.4312")}}]],"stations":[[{{Repeat("1")}}]],"days":[[{{Repeat("1")}}]],"lower":[[{{Repeat("null")}}]],"upper":[[{{Repeat("null")}}]],"revision":"9f2c","comparable":true,"reason":null,"note":null}""",
+        ["getHeatmap"] = $$"""{"measure":"occupancy","unit":"1","stat":"mean","clock":"utc","hours":[{{Hours}}],"bands":["bc-49m"],"values":[[{{Repeat("0.4312")}}]],"stations":[[{{Repeat("1")}}]],"days":[[{{Repeat("1")}}]],"lower":[[{{Repeat("null")}}]],"upper":[[{{Repeat("null")}}]],"revision":"9f2c"}""",
     };
 
     public static JsonNode? Request(string operation, string type) => operation switch

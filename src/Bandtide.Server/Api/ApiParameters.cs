@@ -10,12 +10,12 @@ internal static class ApiParameters
     private static readonly (string Name, string Description, string? Example, string? Fallback, string[] Choices)[] HeatmapTable =
     [
         ("region", "Code of a region: all, itu-1 to itu-3, field-ko, square-ko33, or one drawn up by a coordinator. Region or station is required.", "all", null, []),
-        ("station", "Code of a station.", null, null, []),
+        ("station", "Code of a station.", "north-hut", null, []),
         ("month", "One month, yyyy-MM. One of month, from with to, or season is required.", "2026-06", null, []),
-        ("from", "First month of a range, yyyy-MM.", null, null, []),
-        ("to", "Last month of a range, included.", null, null, []),
-        ("season", "A meteorological season, of each station's own hemisphere; the one that spans New Year takes January's year.", null, null, ["winter", "spring", "summer", "autumn"]),
-        ("years", "Years of the season, 2024 or 2024..2026; all when left out.", null, null, []),
+        ("from", "First month of a range, yyyy-MM.", "2026-04", null, []),
+        ("to", "Last month of a range, included.", "2026-06", null, []),
+        ("season", "A meteorological season, of each station's own hemisphere; the one that spans New Year takes January's year.", "winter", null, ["winter", "spring", "summer", "autumn"]),
+        ("years", "Years of the season, 2024 or 2024..2026; all when left out.", "2024..2026", null, []),
         ("measure", "What is shown.", null, "occupancy", [.. Measures.All.Select(info => info.Code)]),
         ("stat", "How days and stations become one value.", null, "mean", ["mean", "median", "p10", "p90", "sd"]),
         ("clock", "Clock of the hours: UTC, or each station's local apparent solar time.", null, "utc", ["utc", "solar"]),
@@ -29,8 +29,8 @@ internal static class ApiParameters
         ("format", "Overrides Accept, for links.", null, null, ["json", "csv", "svg"]),
     ];
 
-    /// <summary>The query values of a heatmap.</summary>
-    public static IReadOnlyList<OpenApiParameter> Heatmap => [.. HeatmapTable.Select(row => new OpenApiParameter
+    // The query values of a heatmap.
+    private static IReadOnlyList<OpenApiParameter> Heatmap => [.. HeatmapTable.Select(row => new OpenApiParameter
     {
         Name = row.Name,
         In = ParameterLocation.Query,
@@ -44,19 +44,73 @@ internal static class ApiParameters
         },
     })];
 
-    /// <summary>Descriptions and examples by name.</summary>
-    public static IReadOnlyDictionary<string, (string Description, string Example)> Known { get; } = new Dictionary<string, (string, string)>(StringComparer.Ordinal)
+    /// <summary>Completes the path and query values of an operation.</summary>
+    public static void Complete(OpenApiOperation operation)
     {
-        ["code"] = ("Code of the band, region or station: 2 to 24 of a-z, 0-9 and -.", "north-hut"),
+        if (string.Equals(operation.OperationId, "getHeatmap", StringComparison.Ordinal))
+        {
+            operation.Parameters = [.. Heatmap];
+        }
+
+        foreach (var parameter in (operation.Parameters ?? []).OfType<OpenApiParameter>())
+        {
+            var name = parameter.Name ?? "";
+            if (Special.TryGetValue((operation.OperationId ?? "", name), out var known) || Known.TryGetValue(name, out known))
+            {
+                parameter.Description ??= known.Description;
+                parameter.Example ??= JsonValue.Create(known.Example);
+            }
+
+            if (parameter.Schema is OpenApiSchema schema)
+            {
+                Complete(schema, name);
+            }
+        }
+    }
+
+    private static void Complete(OpenApiSchema schema, string name)
+    {
+        switch (name)
+        {
+            case "code" or "region" or "station":
+                schema.Pattern = ApiSchemas.CodePattern;
+                break;
+            case "date":
+                schema.Format = "date";
+                break;
+            case "restore":
+                schema.Enum = ["true", "false"];
+                schema.Default = "false";
+                break;
+            case "format" when schema.Enum is null:
+                schema.Enum = ["json", "csv"];
+                break;
+        }
+    }
+
+    // Where a name means something else in one call.
+    private static readonly Dictionary<(string Operation, string Name), (string Description, string Example)> Special = new()
+    {
+        [("getBand", "code")] = ("Code of the band: 2 to 24 of a-z, 0-9 and -.", "bc-49m"),
+        [("getRegion", "code")] = ("Code of the region: 2 to 24 of a-z, 0-9 and -.", "baltic"),
+        [("listDays", "from")] = ("First date, yyyy-MM-dd; from the beginning when left out.", "2026-06-01"),
+        [("listDays", "to")] = ("Last date, included, yyyy-MM-dd; to the end when left out.", "2026-06-30"),
+        [("getCoverage", "station")] = ("Code of a station. Station or region is required, not both.", "north-hut"),
+        [("getCoverage", "region")] = ("Code of a region.", "all"),
+        [("getCoverage", "month")] = ("One month, yyyy-MM. Either month or from with to is required.", "2026-06"),
+        [("getCoverage", "from")] = ("First month of a range, yyyy-MM.", "2026-04"),
+        [("getCoverage", "to")] = ("Last month of a range, included.", "2026-06"),
+    };
+
+    // Descriptions and examples by name.
+    private static readonly Dictionary<string, (string Description, string Example)> Known = new(StringComparer.Ordinal)
+    {
+        ["code"] = ("Code of the station: 2 to 24 of a-z, 0-9 and -.", "north-hut"),
         ["date"] = ("UTC date, yyyy-MM-dd.", "2026-06-01"),
         ["id"] = ("Identity of the key.", "7"),
         ["revision"] = ("A revision, from 1; the current one when left out.", "1"),
         ["restore"] = ("true: days that were withdrawn are stored anew.", "false"),
-        ["region"] = ("Code of a region.", "all"),
-        ["station"] = ("Code of a station.", "north-hut"),
-        ["month"] = ("One month, yyyy-MM.", "2026-06"),
-        ["from"] = ("First date or month, included.", "2026-06"),
-        ["to"] = ("Last date or month, included.", "2026-06"),
+        ["region"] = ("Code of a region: only its stations.", "all"),
         ["format"] = ("Overrides Accept, for links.", "json"),
     };
 }

@@ -1,6 +1,6 @@
+using Bandtide.Server.Hosting;
 using Bandtide.Server.Security;
-using Bandtide.Storage.Model;
-using Scalar.AspNetCore;
+using Microsoft.AspNetCore.Http.Features;
 
 namespace Bandtide.Server.Api;
 
@@ -12,6 +12,7 @@ internal static class ApiSetup
     public static void AddApi(this IServiceCollection services)
     {
         services.AddOptions<RateLimitOptions>().BindConfiguration("RateLimits").ValidateDataAnnotations().ValidateOnStart();
+        services.AddOptions<UploadOptions>().BindConfiguration("Uploads").ValidateDataAnnotations().ValidateOnStart();
         services.AddSingleton<RequestLimits>();
         services.AddScoped<ScriptNonce>();
         services.AddHttpContextAccessor();
@@ -19,7 +20,7 @@ internal static class ApiSetup
         services.AddProblemDetails();
         services.AddExceptionHandler<FaultHandler>();
         services.AddAntiforgery();
-        services.AddHealthChecks().AddDbContextCheck<BandtideContext>("store");
+        services.AddHealthChecks().AddCheck<StoreHealth>("store", timeout: TimeSpan.FromSeconds(5));
         services.AddOpenApi("v1", ApiDescription.Configure);
         services.AddCors(options => options.AddPolicy(ReadFromElsewhere, policy =>
             policy.AllowAnyOrigin().WithMethods("GET", "HEAD").WithHeaders("Accept", "If-None-Match").WithExposedHeaders("ETag")));
@@ -32,13 +33,17 @@ internal static class ApiSetup
         {
             api.UseStatusCodePages(context => Problems.Of(
                 context.HttpContext.Response.StatusCode, "There is nothing under this address or method.").ExecuteAsync(context.HttpContext));
+            api.Use(LiftBodyLimit);
             api.UseMiddleware<KeyMiddleware>();
         });
     }
 
     public static void MapApi(this WebApplication app)
     {
-        var api = app.MapGroup(Routes.Base).RequireCors(ReadFromElsewhere);
+        // A key that is presented is judged on every call, also where none is needed.
+        var api = app.MapGroup(Routes.Base).RequireCors(ReadFromElsewhere)
+            .WithMetadata(new ProducesResponseTypeMetadata(401, typeof(ApiProblem), [Problems.ContentType]))
+            .WithMetadata(new ProducesResponseTypeMetadata(429, typeof(ApiProblem), [Problems.ContentType]));
         api.MapBands();
         api.MapRegions();
         api.MapStations();
@@ -48,11 +53,20 @@ internal static class ApiSetup
         api.MapHeatmap();
         api.MapCoverage();
         app.MapOpenApi("/openapi/{documentName}.json").RequireCors(ReadFromElsewhere);
-        app.MapScalarApiReference("/reference", (options, context) => options
-            .DisableDefaultFonts().DisableTelemetry().DisableAgent()
-            .WithTitle("Bandtide API").WithNonce(context.RequestServices.GetRequiredService<ScriptNonce>().Value));
         app.MapHealthChecks("/health/live", new() { Predicate = _ => false });
         app.MapHealthChecks("/health/ready", new() { ResponseWriter = WriteHealthAsync });
+    }
+
+    // Every call limits its body itself. A refused body of any size is read to its end by the server, so that a client which
+    // sends all before it reads learns why it was refused.
+    private static Task LiftBodyLimit(HttpContext context, RequestDelegate next)
+    {
+        if (context.Features.Get<IHttpMaxRequestBodySizeFeature>() is { IsReadOnly: false } size)
+        {
+            size.MaxRequestBodySize = null;
+        }
+
+        return next(context);
     }
 
     private static Task WriteHealthAsync(HttpContext context, Microsoft.Extensions.Diagnostics.HealthChecks.HealthReport report) =>

@@ -3,6 +3,7 @@ using Bandtide.Storage.Days;
 using Bandtide.Storage.Network;
 using Microsoft.AspNetCore.Http.Features;
 using Microsoft.AspNetCore.Server.Kestrel.Core.Features;
+using Microsoft.Extensions.Options;
 
 namespace Bandtide.Server.Api;
 
@@ -19,7 +20,8 @@ internal static class BulkApi
             .TakesBody<DaySheetShape>(Csv, Ndjson).Produces<ReceiptAnswer>(200, Ndjson).Refuses(400, 404, 406, 415).WithKey();
 
     private static async Task<IResult> PostAsync(
-        HttpContext context, string code, NetworkStore network, DayStore days, TimeProvider clock, CancellationToken ct, string? restore = null)
+        HttpContext context, string code, NetworkStore network, DayStore days, IOptions<UploadOptions> options, TimeProvider clock, CancellationToken ct,
+        string? restore = null)
     {
         var view = await network.GetAsync(ct);
         if (!StationRoute.TryWrite(context, view, code, out var station, out var problem))
@@ -45,23 +47,19 @@ internal static class BulkApi
         LiftLimits(context);
         var rules = new SheetContext(view.Plan, clock.GetUtcNow());
         IBulkReader reader = type is Csv ? new BulkCsvReader(rules) : new BulkJsonReader(rules);
-        await using var receipts = new ReceiptWriter(context.Response);
-        var upload = new BulkUpload(station, days, restore is "true", reader, receipts, clock);
-        var refused = await upload.RunAsync(RequestBody.Decoded(context.Request), ct);
+        var patience = options.Value.Silence;
+        await using var receipts = new ReceiptWriter(context, patience, clock);
+        var upload = new BulkUpload(station, days, restore is "true", reader, receipts, RequestBody.Decoded(context.Request), patience, clock);
+        var refused = await upload.RunAsync();
         return refused ?? Results.Empty;
     }
 
-    // A body may be of any size and come slowly, and its sender may read the answer only when all is sent.
+    // A body may come slowly, and its sender may read the answer only when all is sent; silence alone ends the patience.
     private static void LiftLimits(HttpContext context)
     {
-        if (context.Features.Get<IHttpMaxRequestBodySizeFeature>() is { IsReadOnly: false } size)
-        {
-            size.MaxRequestBodySize = null;
-        }
-
         if (context.Features.Get<IHttpMinRequestBodyDataRateFeature>() is { } inward)
         {
-            inward.MinDataRate = new(bytesPerSecond: 1, gracePeriod: TimeSpan.FromMinutes(2));
+            inward.MinDataRate = null;
         }
 
         if (context.Features.Get<IHttpMinResponseDataRateFeature>() is { } outward)

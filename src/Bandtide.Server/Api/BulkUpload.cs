@@ -6,31 +6,83 @@ namespace Bandtide.Server.Api;
 
 /// <summary>One bulk upload: reads the body, commits complete days together, acknowledges each after its commit.</summary>
 /// <remarks>No transaction is open while input is awaited: at most 366 days, 8 MiB or one second are gathered, then committed.</remarks>
+/// <param name="station">Whose days.</param>
+/// <param name="store">Where they go.</param>
+/// <param name="restore">Whether a withdrawn day is stored anew.</param>
+/// <param name="reader">Makes days of bytes.</param>
+/// <param name="receipts">Takes the answer's lines.</param>
+/// <param name="body">The decoded body.</param>
+/// <param name="patience">How long the sender may be silent.</param>
+/// <param name="clock">Measures both times.</param>
 internal sealed class BulkUpload(
-    Station station, DayStore store, bool restore, IBulkReader reader, ReceiptWriter receipts, TimeProvider clock)
+    Station station, DayStore store, bool restore, IBulkReader reader, ReceiptWriter receipts, Stream body, TimeSpan patience, TimeProvider clock)
 {
     private const int MostDays = 366;
     private const int MostBytes = 8 * 1024 * 1024;
     private const int ChunkBytes = 64 * 1024;
     private static readonly TimeSpan LongestWait = TimeSpan.FromSeconds(1);
 
+    private readonly byte[] chunk = new byte[ChunkBytes];
     private readonly List<BulkDay> completed = [];
     private readonly List<BulkDay> waiting = [];
+    private Task<int>? pending;
     private int waitingBytes;
     private long waitingSince;
+    private long silentSince;
 
-    /// <returns>The refusal of the whole body, or <c>null</c> when receipts were written.</returns>
-    public async Task<IResult?> RunAsync(Stream body, CancellationToken ct)
+    private enum BodyEnd
     {
-        var chunk = new byte[ChunkBytes];
-        var endedProperly = false;
-        Task<int>? pending = null;
+        Proper,
+        Broken,
+        Silent,
+        Unread,
+    }
+
+    /// <summary>Runs the upload to its end.</summary>
+    /// <returns>The refusal of the whole body, or <c>null</c> when receipts were written.</returns>
+    public async Task<IResult?> RunAsync()
+    {
+        var end = await ReadAsync();
+        var headerRead = reader.HeaderRead;
+        if (end != BodyEnd.Unread)
+        {
+            reader.Finish(end == BodyEnd.Proper, completed);
+        }
+
+        if (reader.HeaderProblems.Count > 0)
+        {
+            return Problems.Bad(reader.HeaderProblems);
+        }
+
+        if (!headerRead && end == BodyEnd.Broken)
+        {
+            return Problems.Bad("", SheetRule.BodyIncomplete, "The body broke off before its header line was complete.");
+        }
+
+        await TakeAsync();
+        await CommitAsync();
+        receipts.Begin();
+        if (end == BodyEnd.Silent)
+        {
+            await receipts.BreakOffAsync();
+        }
+
+        if (end != BodyEnd.Proper)
+        {
+            await DrainAsync();
+        }
+
+        return null;
+    }
+
+    private async Task<BodyEnd> ReadAsync()
+    {
         try
         {
             while (!reader.Stopped)
             {
-                pending ??= body.ReadAsync(chunk, ct).AsTask();
-                if (!await ArrivesAsync(pending, ct))
+                pending ??= NextAsync();
+                if (!await ArrivesAsync(pending))
                 {
                     await CommitAsync();
                     continue;
@@ -40,46 +92,49 @@ internal sealed class BulkUpload(
                 pending = null;
                 if (read == 0)
                 {
-                    endedProperly = true;
-                    break;
+                    return BodyEnd.Proper;
                 }
 
                 reader.Feed(chunk.AsSpan(0, read), completed);
                 await TakeAsync();
             }
-        }
-        catch (Exception e) when (e is InvalidDataException or IOException or BadHttpRequestException or OperationCanceledException)
-        {
-            // The connection broke, or the compressed data did: every complete day is still stored.
-        }
 
-        if (!reader.Stopped)
-        {
-            reader.Finish(endedProperly, completed);
+            return BodyEnd.Unread;
         }
-
-        if (reader.HeaderProblems.Count > 0)
+        catch (TimeoutException)
         {
-            return Problems.Bad(reader.HeaderProblems);
+            return BodyEnd.Silent;
         }
-
-        await TakeAsync();
-        await CommitAsync();
-        receipts.Begin();
-        await DrainAsync(body, chunk, endedProperly, pending, ct);
-        return null;
+        catch (Exception e) when (IsBreak(e))
+        {
+            // The connection or the compressed data broke: every complete day is still stored.
+            return BodyEnd.Broken;
+        }
     }
 
-    // False when days have waited long enough though the next bytes have not come.
-    private async Task<bool> ArrivesAsync(Task<int> pending, CancellationToken ct)
+    // Nothing cancels a read but the connection itself: the server could not use the connection afterwards.
+    private Task<int> NextAsync()
     {
-        if (waiting.Count == 0 || pending.IsCompleted)
+        silentSince = clock.GetTimestamp();
+        return body.ReadAsync(chunk, CancellationToken.None).AsTask();
+    }
+
+    // False when days have waited long enough though the next bytes have not come; a sender silent for too long is given up.
+    private async Task<bool> ArrivesAsync(Task<int> next)
+    {
+        var rest = patience - clock.GetElapsedTime(silentSince);
+        if (waiting.Count > 0 && LongestWait - clock.GetElapsedTime(waitingSince) is var due && due < rest)
         {
-            return true;
+            rest = due;
         }
 
-        var rest = LongestWait - clock.GetElapsedTime(waitingSince);
-        return rest > TimeSpan.Zero && await Task.WhenAny(pending, Task.Delay(rest, clock, ct)) == pending;
+        if (next.IsCompleted || rest <= TimeSpan.Zero)
+        {
+            return next.IsCompleted || (waiting.Count == 0 ? throw new TimeoutException() : false);
+        }
+
+        await ((Task)next.WaitAsync(rest, clock)).ConfigureAwait(ConfigureAwaitOptions.SuppressThrowing);
+        return next.IsCompleted || await ArrivesAsync(next);
     }
 
     private async Task TakeAsync()
@@ -129,19 +184,20 @@ internal sealed class BulkUpload(
     }
 
     // A client that sends all before it reads must be able to, also where reading has stopped early.
-    private static async Task DrainAsync(Stream body, byte[] chunk, bool ended, Task<int>? pending, CancellationToken ct)
+    private async Task DrainAsync()
     {
         try
         {
-            var read = ended ? 0 : await (pending ?? body.ReadAsync(chunk, ct).AsTask());
-            while (read > 0)
+            while (await (pending ?? NextAsync()).WaitAsync(patience, clock) > 0)
             {
-                read = await body.ReadAsync(chunk, ct);
+                pending = null;
             }
         }
-        catch (Exception e) when (e is InvalidDataException or IOException or BadHttpRequestException or OperationCanceledException)
+        catch (Exception e) when (IsBreak(e) || e is TimeoutException)
         {
             // Nothing more to read.
         }
     }
+
+    private static bool IsBreak(Exception e) => e is InvalidDataException or IOException or BadHttpRequestException or OperationCanceledException;
 }

@@ -13,6 +13,7 @@ internal static class CoverageApi
     private const string Json = "application/json";
     private const string Csv = "text/csv";
     private const int MostMonths = 120;
+    private static readonly string[] Names = ["station", "region", "month", "from", "to", "format"];
 
     public static void MapCoverage(this IEndpointRouteBuilder routes) =>
         routes.MapGet("/coverage", GetAsync).WithName("getCoverage").WithTags("Coverage").WithSummary("Who reported when, station by day")
@@ -43,6 +44,11 @@ internal static class CoverageApi
         if (last.Number < first.Number || last.Number - first.Number >= MostMonths)
         {
             check.Add("to", "range-order", $"to must not come before from, nor lie {MostMonths} months or more after it.");
+        }
+
+        foreach (var name in context.Request.Query.Keys.Where(name => !Names.Contains(name, StringComparer.Ordinal)))
+        {
+            check.Add(name.Length <= 40 ? name : name[..40], "name-unknown", "This query value does not exist.");
         }
 
         if (format is not (null or "json" or "csv"))

@@ -1,4 +1,5 @@
 using System.Buffers;
+using System.Diagnostics.CodeAnalysis;
 using System.Globalization;
 using Bandtide.Core.Bands;
 using Bandtide.Core.Sheets;
@@ -20,7 +21,7 @@ internal static class DaysApi
         routes.MapPut("/stations/{code}/days/{date}", PutAsync).WithName("putDay").WithTags("Days").WithSummary("Store one day; sending it again replaces it")
             .TakesBody<DaySheetShape>(Json, Csv).Produces<ReceiptAnswer>(201).Produces<ReceiptAnswer>().Refuses(400, 404, 406, 413, 415).WithKey();
         routes.MapGet("/stations/{code}/days/{date}", GetAsync).WithName("getDay").WithTags("Days").WithSummary("Read a day back, now or as it was")
-            .Produces<DaySheetShape>(200, Json, Csv).Refuses(400, 404, 406, 410);
+            .Produces<DaySheetShape>(200, Json, Csv).Produces(304).Refuses(400, 404, 406, 410);
         routes.MapDelete("/stations/{code}/days/{date}", WithdrawAsync).WithName("withdrawDay").WithTags("Days").WithSummary("Withdraw a day; its revisions stay readable")
             .Produces(204).Refuses(400, 404, 410).WithKey();
         routes.MapGet("/stations/{code}/days/{date}/revisions", RevisionsAsync).WithName("listRevisions").WithTags("Days").WithSummary("All revisions of a day, oldest first")
@@ -76,33 +77,33 @@ internal static class DaysApi
     private static async Task<IResult> GetAsync(
         HttpContext context, string code, string date, NetworkStore network, DayStore days, CancellationToken ct, string? revision = null)
     {
+        context.Response.Headers.Vary = "Accept";
         var view = await network.GetAsync(ct);
-        if (!StationRoute.TryFind(view, code, out var station, out var problem) || !StationRoute.TryDate(date, out var day, out problem))
+        if (!StationRoute.TryFind(view, code, out var station, out var problem))
         {
             return problem;
         }
 
-        int? wanted = null;
-        if (revision is not null)
+        var type = Negotiation.Choose(context.Request, Json, Csv);
+        var wanted = 0;
+        if (!StationRoute.TryDate(date, out var day, out problem) || (revision is not null && !TryRevision(revision, out wanted, out problem)))
         {
-            if (!int.TryParse(revision, NumberStyles.None, CultureInfo.InvariantCulture, out var number) || number < 1)
-            {
-                return Problems.Bad("revision", "number-syntax", "A revision is a whole number from 1.");
-            }
-
-            wanted = number;
+            return type is null ? Problems.NotAcceptable($"{Json} and {Csv}") : problem;
         }
 
-        var stored = await days.FindAsync(station, day, wanted, ct);
-        if (stored is null)
-        {
-            return Problems.NotFound(wanted is null ? $"{code} has no day {date}." : $"{code} has no revision {wanted} of {date}.");
-        }
-
-        context.Response.Headers.Vary = "Accept";
-        return stored.Sheet is null ? Problems.Gone(wanted is null ? $"The day {date} was withdrawn." : $"Revision {wanted} withdrew the day.")
-            : Negotiation.Choose(context.Request, Json, Csv) is not { } type ? Problems.NotAcceptable($"{Json} and {Csv}")
+        var stored = await days.FindAsync(station, day, revision is null ? null : wanted, ct);
+        return stored is null ? Problems.NotFound(revision is null ? $"{code} has no day {date}." : $"{code} has no revision {wanted} of {date}.")
+            : stored.Sheet is null ? Problems.Gone(revision is null ? $"The day {date} was withdrawn." : $"Revision {wanted} withdrew the day.")
+            : type is null ? Problems.NotAcceptable($"{Json} and {Csv}")
             : Sheet(context, view.Plan, station, stored, type);
+    }
+
+    private static bool TryRevision(string text, out int revision, [NotNullWhen(false)] out IResult? problem)
+    {
+        problem = int.TryParse(text, NumberStyles.None, CultureInfo.InvariantCulture, out revision) && revision > 0
+            ? null
+            : Problems.Bad("revision", "number-syntax", "A revision is a whole number from 1.");
+        return problem is null;
     }
 
     private static IResult Sheet(HttpContext context, BandPlan plan, Station station, StoredDay stored, string type)
@@ -166,13 +167,19 @@ internal static class DaysApi
             return problem;
         }
 
-        var (first, last) = (default(DateOnly), DateOnly.MaxValue);
-        if ((from is not null && !DateText.TryParse(from, out first)) || (to is not null && !DateText.TryParse(to, out last)) || first > last)
+        var check = new FieldCheck();
+        var (first, last) = (check.Date("from", from), check.Date("to", to));
+        if (first > last)
         {
-            return Problems.Bad("from", "date-syntax", "from and to are dates, yyyy-MM-dd, from not after to.");
+            check.Add("to", "range-order", "to must not come before from.");
         }
 
-        var listed = await days.ListAsync(station, from is null ? null : first, to is null ? null : last, ct);
+        if (check.Problem is { } refusal)
+        {
+            return refusal;
+        }
+
+        var listed = await days.ListAsync(station, first, last, ct);
         return Results.Ok(listed.Select(stored => new DayListing(DateText.Format(stored.Date), stored.Revision, stored.Checksum, stored.Cells)));
     }
 }

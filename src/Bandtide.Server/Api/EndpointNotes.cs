@@ -22,5 +22,5 @@ internal static class EndpointNotes
 
     /// <summary>Requires a key: 401 without one, 403 when it is another's, 429 when it is used too fast.</summary>
     public static RouteHandlerBuilder WithKey(this RouteHandlerBuilder endpoint) =>
-        endpoint.WithMetadata(NeedsKey.Instance).Refuses(401, 403, 429);
+        endpoint.WithMetadata(NeedsKey.Instance).Refuses(403);
 }

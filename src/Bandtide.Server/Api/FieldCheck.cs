@@ -1,6 +1,7 @@
 using System.Globalization;
 using Bandtide.Core;
 using Bandtide.Core.Sheets;
+using Bandtide.Core.Time;
 
 namespace Bandtide.Server.Api;
 
@@ -19,6 +20,22 @@ internal sealed class FieldCheck
         {
             Add(field, "code-syntax", "A code is 2 to 24 of a-z, 0-9 and -.");
         }
+    }
+
+    public DateOnly? Date(string field, string? text)
+    {
+        if (string.IsNullOrEmpty(text))
+        {
+            return null;
+        }
+
+        if (DateText.TryParse(text, out var date))
+        {
+            return date;
+        }
+
+        Add(field, SheetRule.DateSyntax, $"{field} must be a date, yyyy-MM-dd.");
+        return null;
     }
 
     public void Text(string field, string? text, int longest, bool required = false)

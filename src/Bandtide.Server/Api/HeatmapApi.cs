@@ -40,12 +40,27 @@ internal static class HeatmapApi
             return Problems.NotFound(query.Station is null ? $"There is no region '{query.Region}'." : $"There is no station '{query.Station}'.");
         }
 
+        if (query is null && await UnknownAsync(values, network, ct) is { } unknown)
+        {
+            return unknown;
+        }
+
         if (type is null)
         {
             return Problems.NotAcceptable($"{Json}, {Csv} and {Svg}");
         }
 
         return query is null || problems.Count > 0 ? Problems.Bad(problems) : await AnswerAsync(context, reader, network, query, revision!, type, ct);
+    }
+
+    // 404 goes before what else may be wrong with a query.
+    private static async Task<IResult?> UnknownAsync(IQueryCollection values, NetworkStore network, CancellationToken ct)
+    {
+        var view = await network.GetAsync(ct);
+        string? Code(string name) => values[name] is [{ } text] && Core.Codes.IsValid(text) ? text : null;
+        return Code("station") is { } station && view.FindStation(station) is null ? Problems.NotFound($"There is no station '{station}'.")
+            : Code("region") is { } region && view.FindRegion(region) is null ? Problems.NotFound($"There is no region '{region}'.")
+            : null;
     }
 
     private static async Task<IResult> AnswerAsync(
@@ -79,7 +94,9 @@ internal static class HeatmapApi
 
     private static IResult Picture(HttpContext context, HeatmapAnswer answer, NetworkView network)
     {
+        // A club's own site may show it, as a picture or in a frame.
         context.Response.Headers["Cross-Origin-Resource-Policy"] = "cross-origin";
+        context.Response.Headers.ContentSecurityPolicy = "default-src 'none'";
         return Results.Text(HeatmapSvg.Render(HeatmapFigure.Of(answer, FigureWords.PlaceName(network, answer.Query))), Svg, Encoding.UTF8);
     }
 
@@ -93,7 +110,7 @@ internal static class HeatmapApi
             [.. Enumerable.Range(0, 24)], [.. map.Bands.Select(band => band.Code)],
             Rows(cell => Rounded(cell.Value)), Rows(cell => cell.Stations), Rows(cell => cell.Days),
             Rows(cell => Rounded(cell.Lower)), Rows(cell => Rounded(cell.Upper)), answer.Revision,
-            answer.NotComparable is null, answer.NotComparable, answer.Note);
+            answer.NotComparable is null ? null : false, answer.NotComparable, answer.Note);
     }
 
     private static string CsvOf(HeatmapAnswer answer)
@@ -104,7 +121,7 @@ internal static class HeatmapApi
             for (var hour = 0; hour < 24; hour++)
             {
                 var cell = answer.Heatmap[b, hour];
-                text.Append(CultureInfo.InvariantCulture, $"{answer.Heatmap.Bands[b].Code},{hour},{Rounded(cell.Value)},{Rounded(cell.Lower)},{Rounded(cell.Upper)},{cell.Stations},{cell.Days}\n");
+                text.Append(CultureInfo.InvariantCulture, $"{answer.Heatmap.Bands[b].Code},{hour},{Rounded(cell.Value):0.######},{Rounded(cell.Lower):0.######},{Rounded(cell.Upper):0.######},{cell.Stations},{cell.Days}\n");
             }
         }
 

@@ -7,47 +7,79 @@ namespace Bandtide.Server.Api;
 /// Sends receipts line by line without ever making the upload wait: lines the client does not read yet are kept, at most
 /// one for each of a body's days.
 /// </summary>
-internal sealed class ReceiptWriter(HttpResponse response) : IAsyncDisposable
+/// <param name="context">The request, whose answer the lines are.</param>
+/// <param name="patience">How long the client may take no byte once the body has ended.</param>
+/// <param name="clock">Measures that.</param>
+internal sealed class ReceiptWriter(HttpContext context, TimeSpan patience, TimeProvider clock) : IAsyncDisposable
 {
-    private readonly Channel<byte[]> lines = Channel.CreateUnbounded<byte[]>(new() { SingleReader = true });
+    private const int PlainBytes = 1024 * 1024;
+
+    private readonly Channel<KeptLine> lines = Channel.CreateUnbounded<KeptLine>(new() { SingleReader = true });
+    private readonly CancellationTokenSource stalled = new(Timeout.InfiniteTimeSpan, clock);
     private Task? sending;
+    private volatile bool ending;
+    private long kept;
 
     public void Write(object receipt)
     {
         byte[] line = [.. JsonSerializer.SerializeToUtf8Bytes(receipt, receipt.GetType(), WireJson.Options), (byte)'\n'];
-        lines.Writer.TryWrite(line);
-        sending ??= SendAsync();
+        var entry = Interlocked.Read(ref kept) > PlainBytes ? KeptLine.Packed(line) : KeptLine.Plain(line);
+        Interlocked.Add(ref kept, entry.Size);
+        lines.Writer.TryWrite(entry);
+        Begin();
     }
 
     /// <summary>Begins the answer even without a line.</summary>
     public void Begin() => sending ??= SendAsync();
 
+    /// <summary>Sends what is known and ends the connection, so that nobody takes the answer for a whole one.</summary>
+    public async Task BreakOffAsync()
+    {
+        await FinishAsync();
+        context.Abort();
+    }
+
     public async ValueTask DisposeAsync()
     {
+        await FinishAsync();
+        stalled.Dispose();
+    }
+
+    private async Task FinishAsync()
+    {
         lines.Writer.TryComplete();
+        ending = true;
+        stalled.CancelAfter(patience);
         await (sending ?? Task.CompletedTask);
     }
 
     private async Task SendAsync()
     {
+        var response = context.Response;
         response.StatusCode = StatusCodes.Status200OK;
         response.ContentType = "application/x-ndjson";
-        var aborted = response.HttpContext.RequestAborted;
+        using var stop = CancellationTokenSource.CreateLinkedTokenSource(context.RequestAborted, stalled.Token);
         try
         {
-            while (await lines.Reader.WaitToReadAsync(aborted))
+            while (await lines.Reader.WaitToReadAsync(stop.Token))
             {
                 while (lines.Reader.TryRead(out var line))
                 {
-                    await response.Body.WriteAsync(line, aborted);
+                    await response.Body.WriteAsync(line.Bytes(), stop.Token);
+                    Interlocked.Add(ref kept, -line.Size);
+                    if (ending)
+                    {
+                        stalled.CancelAfter(patience);
+                    }
                 }
 
-                await response.Body.FlushAsync(aborted);
+                await response.Body.FlushAsync(stop.Token);
             }
         }
         catch (Exception e) when (e is OperationCanceledException or IOException)
         {
-            // The client has gone; what was stored stays stored.
+            // The client has gone, or takes nothing; what was stored stays stored.
+            context.Abort();
         }
     }
 }

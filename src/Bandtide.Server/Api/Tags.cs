@@ -7,9 +7,12 @@ namespace Bandtide.Server.Api;
 /// <summary>Strong entity tags (RFC 9110, 8.8.3).</summary>
 internal static class Tags
 {
-    /// <summary>A tag that is equal exactly when all parts are.</summary>
+    // Another build may write the same values otherwise.
+    private static readonly string Build = typeof(Tags).Assembly.ManifestModule.ModuleVersionId.ToString("N");
+
+    /// <summary>A tag that is equal exactly when all parts are, and the program is the same.</summary>
     public static string Of(params ReadOnlySpan<string> parts) =>
-        $"\"{Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes(string.Join('\n', parts!))).AsSpan(0, 12))}\"";
+        $"\"{Convert.ToHexStringLower(SHA256.HashData(Encoding.UTF8.GetBytes($"{Build}\n{string.Join('\n', parts!)}")).AsSpan(0, 12))}\"";
 
     /// <summary>Sets the tag and says whether the reader has this version already.</summary>
     public static bool NotModified(HttpContext context, string tag)

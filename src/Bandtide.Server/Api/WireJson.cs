@@ -1,5 +1,6 @@
 using System.Text.Encodings.Web;
 using System.Text.Json;
+using System.Text.Json.Serialization;
 
 namespace Bandtide.Server.Api;
 
@@ -11,6 +12,7 @@ internal static class WireJson
     public static JsonSerializerOptions Configure(JsonSerializerOptions options)
     {
         options.Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping;
+        options.NumberHandling = JsonNumberHandling.Strict;
         return options;
     }
 }

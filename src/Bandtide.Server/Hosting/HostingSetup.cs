@@ -29,7 +29,8 @@ internal static class HostingSetup
     /// <summary>Says where the server is and, on a first start, how the first coordinator comes in.</summary>
     public static void Announce(this WebApplication app, string? link)
     {
-        var url = app.Urls.FirstOrDefault() ?? DefaultUrl;
+        // An address that means "every interface" is none that a browser can open.
+        var url = (app.Urls.FirstOrDefault() ?? DefaultUrl).Replace("0.0.0.0", "localhost", StringComparison.Ordinal).Replace("[::]", "localhost", StringComparison.Ordinal);
         Console.WriteLine($"Bandtide is at {url}");
         if (link is not null)
         {

@@ -31,14 +31,28 @@ internal static class SetupPage
     private static async Task<IResult> RedeemAsync(
         string token, HttpContext context, FirstCoordinator first, IAntiforgery antiforgery, CancellationToken ct)
     {
-        if (!await antiforgery.IsRequestValidAsync(context))
+        if (!await IsFromPageAsync(antiforgery, context))
         {
             return Page("Not sent from this page", "<p>Open the link again and use its button.</p>", 400);
         }
 
+        context.Response.Headers.CacheControl = "no-store";
         return await first.RedeemAsync(token, ct) is { } key
             ? Page("Your key", $"<p>Keep it now; it will not be shown again.</p><p><code>{WebUtility.HtmlEncode(key)}</code></p><p><a href=\"/data\">How to use it</a></p>")
             : Page("Link not good", "<p>This link has been used already.</p>", 404);
+    }
+
+    private static async Task<bool> IsFromPageAsync(IAntiforgery antiforgery, HttpContext context)
+    {
+        try
+        {
+            return await antiforgery.IsRequestValidAsync(context);
+        }
+        catch (AntiforgeryValidationException)
+        {
+            // The form could not be read at all.
+            return false;
+        }
     }
 
     private static IResult Page(string title, string body, int status = 200) => Results.Content($"""

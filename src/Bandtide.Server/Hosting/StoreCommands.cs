@@ -8,11 +8,11 @@ internal static class StoreCommands
     private static readonly string[] Names = ["migrate", "rebuild", "verify", "backup"];
 
     /// <summary>The command of a command line, or <c>null</c> when the server is to start.</summary>
-    public static string? Of(string[] args) => args.Length > 0 && Names.Contains(args[0], StringComparer.Ordinal) ? args[0] : null;
+    public static string? Of(IReadOnlyList<string> args) => args.Count > 0 && Names.Contains(args[0], StringComparer.Ordinal) ? args[0] : null;
 
     /// <summary>Runs a command; words go to standard error, results to standard output.</summary>
     /// <returns>0 when it succeeded, 1 otherwise.</returns>
-    public static async Task<int> RunAsync(string[] args, StoreMaintenance store, CancellationToken ct)
+    public static async Task<int> RunAsync(IReadOnlyList<string> args, StoreMaintenance store, CancellationToken ct)
     {
         switch (args[0])
         {
@@ -29,7 +29,7 @@ internal static class StoreCommands
                 await store.MigrateAsync(ct);
                 return Report(await store.VerifyAsync(ct));
             default:
-                return args.Length > 1 ? await BackupAsync(store, args[1], ct) : Fail("backup needs the name of a file to write.");
+                return args.Count > 1 ? await BackupAsync(store, args[1], ct) : Fail("backup needs the name of a file to write.");
         }
     }
 

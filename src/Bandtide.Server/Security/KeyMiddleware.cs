@@ -14,6 +14,9 @@ internal sealed class KeyMiddleware(RequestDelegate next, KeyStore keys, Request
     private const string Scheme = "Bearer ";
     private const int LongestKey = 512;
 
+    // What proxies add, and what is left of it where the host has taken the client's address from it.
+    private static readonly string[] SignsOfProxy = ["Forwarded", "Via", "X-Forwarded-For", "X-Forwarded-Host", "X-Forwarded-Proto", "X-Original-For", "X-Real-IP"];
+
     public async Task InvokeAsync(HttpContext context)
     {
         var header = context.Request.Headers.Authorization;
@@ -61,7 +64,7 @@ internal sealed class KeyMiddleware(RequestDelegate next, KeyStore keys, Request
     // A forwarded request comes from elsewhere, though the proxy's connection comes from here.
     private static bool IsFromThisMachine(HttpContext context) =>
         context.Connection.RemoteIpAddress is { } address && IPAddress.IsLoopback(address)
-        && !context.Request.Headers.ContainsKey("X-Forwarded-For") && !context.Request.Headers.ContainsKey("Forwarded");
+        && !SignsOfProxy.Any(context.Request.Headers.ContainsKey);
 
     private async Task RefuseAsync(HttpContext context, string detail)
     {

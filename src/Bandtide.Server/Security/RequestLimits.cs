@@ -34,8 +34,8 @@ internal sealed class RequestLimits(IOptions<RateLimitOptions> options) : IDispo
         where T : notnull => PartitionedRateLimiter.Create<T, T>(partition => RateLimitPartition.GetTokenBucketLimiter(partition, _ => new()
         {
             TokenLimit = burst,
-            TokensPerPeriod = Math.Max(1, perSecond / 10),
-            ReplenishmentPeriod = TimeSpan.FromMilliseconds(perSecond >= 10 ? 100 : 1000.0 / perSecond),
+            TokensPerPeriod = perSecond,
+            ReplenishmentPeriod = TimeSpan.FromSeconds(1),
             QueueLimit = 0,
         }));
 }

@@ -3,15 +3,14 @@ namespace Bandtide.Server.Security;
 /// <summary>Response headers that keep a page to its own scripts and its own host.</summary>
 internal static class SecurityHeaders
 {
-    private static readonly System.Text.CompositeFormat Policy = System.Text.CompositeFormat.Parse(
-        "default-src 'self'; script-src 'self' 'nonce-{0}'; {1}style-src-attr 'unsafe-inline'; img-src 'self' data: blob:; "
-        + "connect-src 'self'; base-uri 'self'; object-src 'none'; form-action 'self'; frame-ancestors 'none'");
-
-    // The API reference's script writes its own style elements.
-    private const string OwnStyles = "style-src-elem 'self' 'unsafe-inline'; ";
-
     // The hash is that of the empty style element that the plotting script adds.
-    private const string StrictStyles = "style-src-elem 'self' 'sha256-47DEQpj8HBSa+/TImW+5JCeuQeRkm5NMpJWZG3hSuFU='; ";
+    private static readonly System.Text.CompositeFormat Policy = System.Text.CompositeFormat.Parse(
+        "default-src 'self'; script-src 'self' 'nonce-{0}'; style-src-elem 'self' 'sha256-47DEQpj8HBSa+/TImW+5JCeuQeRkm5NMpJWZG3hSuFU='; "
+        + "style-src-attr 'unsafe-inline'; img-src 'self' data: blob:; connect-src 'self'; base-uri 'self'; object-src 'none'; "
+        + "form-action 'self'; frame-ancestors 'none'");
+
+    // Numbers need nothing.
+    private const string DataPolicy = "default-src 'none'; frame-ancestors 'none'";
 
     public static IApplicationBuilder UseSecurityHeaders(this IApplicationBuilder app) => app.Use((context, next) =>
     {
@@ -19,9 +18,10 @@ internal static class SecurityHeaders
         headers.XContentTypeOptions = "nosniff";
         headers["Referrer-Policy"] = "same-origin";
         headers["Permissions-Policy"] = "geolocation=(), camera=(), microphone=()";
-        headers.ContentSecurityPolicy = string.Format(
-            System.Globalization.CultureInfo.InvariantCulture, Policy, context.RequestServices.GetRequiredService<ScriptNonce>().Value,
-            context.Request.Path.StartsWithSegments("/reference", StringComparison.Ordinal) ? OwnStyles : StrictStyles);
-        return next();
+        headers.ContentSecurityPolicy = context.Request.Path.StartsWithSegments("/api", StringComparison.Ordinal) ? DataPolicy : PagePolicy(context);
+        return next(context);
     });
+
+    private static string PagePolicy(HttpContext context) => string.Format(
+        System.Globalization.CultureInfo.InvariantCulture, Policy, context.RequestServices.GetRequiredService<ScriptNonce>().Value);
 }

@@ -101,7 +101,9 @@ public sealed class BulkReadingTests
         var days = new List<BulkDay>();
         reader.Feed(Encoding.UTF8.GetBytes(Header + "2026-01-01,0,bc-49m,1,0\n2026-01-02,0,bc-49m,1,0\n"), days);
         reader.Finish(endedProperly: false, days);
-        Assert.Equal("2026-01-01", Assert.Single(days).DateText);
+        Assert.Equal("2026-01-01 2026-01-02", string.Join(" ", days.Select(day => day.DateText)));
+        Assert.NotNull(days[0].Reading.Sheet);
+        Assert.Equal((4, "", SheetRule.BodyIncomplete), One(days[1]));
     }
 
     [Fact]

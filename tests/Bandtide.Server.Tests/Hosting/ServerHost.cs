@@ -3,6 +3,7 @@ using System.Net.Http.Headers;
 using System.Net.Http.Json;
 using System.Text.Json.Nodes;
 using Bandtide.Storage;
+using Bandtide.Testing;
 using Bandtide.Testing.Databases;
 using Microsoft.AspNetCore.Hosting;
 using Microsoft.AspNetCore.Mvc.Testing;
@@ -34,11 +35,19 @@ public sealed class ServerHost : IAsyncDisposable
     /// <summary>A client without a key.</summary>
     public HttpClient Visitor { get; }
 
+    /// <summary>The server's own services.</summary>
+    public IServiceProvider Services => factory.Services;
+
     /// <summary>The store behind the server, opened a second time.</summary>
     public TestStore Store => store;
 
+    /// <summary>Starts the server.</summary>
+    /// <param name="kind">Its database.</param>
+    /// <param name="clock">Its clock; noon of 2026-07-01 when left out, so that no date of a test lies in the future anywhere.</param>
+    /// <param name="settings">Further settings.</param>
     public static async Task<ServerHost> StartAsync(StoreKind kind, TimeProvider? clock = null, params (string Key, string Value)[] settings)
     {
+        clock ??= new SettableClock(new(2026, 7, 1, 12, 0, 0, TimeSpan.Zero));
         var behind = await TestStore.StartAsync(kind, clock, migrated: false);
         var server = new WebApplicationFactory<Program>().WithWebHostBuilder(builder =>
         {
@@ -51,10 +60,7 @@ public sealed class ServerHost : IAsyncDisposable
                 builder.UseSetting(key, value);
             }
 
-            if (clock is not null)
-            {
-                builder.ConfigureServices(services => services.AddSingleton(clock));
-            }
+            builder.ConfigureServices(services => services.AddSingleton(clock));
         });
         server.UseKestrel(kestrel => kestrel.Listen(IPAddress.Loopback, 0));
         server.StartServer();

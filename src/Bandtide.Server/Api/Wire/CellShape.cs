@@ -12,4 +12,5 @@ namespace Bandtide.Server.Api;
 /// <param name="Steady">Share of bins that look like a local carrier, 0 to 1.</param>
 /// <param name="Coverage">Share of the band observed, 0 to 1; absent means all.</param>
 public sealed record CellShape(
-    int Hour, string Band, int Sweeps, double Occupancy, double? Signal, double? Level, double? LevelP90, double? Floor, double? Steady, double? Coverage);
+    int Hour, string Band, int Sweeps, double Occupancy, double? Signal = null, double? Level = null, double? LevelP90 = null, double? Floor = null,
+    double? Steady = null, double? Coverage = null);

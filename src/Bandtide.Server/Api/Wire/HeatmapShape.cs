@@ -1,3 +1,5 @@
+using System.Text.Json.Serialization;
+
 namespace Bandtide.Server.Api;
 
 /// <summary>A heatmap as JSON; every list of lists has a row per band and 24 entries per row, <c>null</c> where there is none.</summary>
@@ -13,10 +15,13 @@ namespace Bandtide.Server.Api;
 /// <param name="Lower">Lower end of the 95 % interval of the mean.</param>
 /// <param name="Upper">Upper end of the 95 % interval of the mean.</param>
 /// <param name="Revision">Changes whenever the answer could.</param>
-/// <param name="Comparable">Whether values of different stations may be compared.</param>
-/// <param name="Reason">Why they may not.</param>
-/// <param name="Note">What a reader should know: why there is nothing, a season without meaning, few stations.</param>
+/// <param name="Comparable"><c>false</c> where levels of these stations must not be compared; left out otherwise.</param>
+/// <param name="Reason">Why they must not; left out otherwise.</param>
+/// <param name="Note">What a reader should know: why there is nothing, a season without meaning, few stations; left out otherwise.</param>
 public sealed record HeatmapShape(
     string Measure, string Unit, string Stat, string Clock, IReadOnlyList<int> Hours, IReadOnlyList<string> Bands,
     IReadOnlyList<IReadOnlyList<double?>> Values, IReadOnlyList<IReadOnlyList<int>> Stations, IReadOnlyList<IReadOnlyList<int>> Days,
-    IReadOnlyList<IReadOnlyList<double?>> Lower, IReadOnlyList<IReadOnlyList<double?>> Upper, string Revision, bool Comparable, string? Reason, string? Note);
+    IReadOnlyList<IReadOnlyList<double?>> Lower, IReadOnlyList<IReadOnlyList<double?>> Upper, string Revision,
+    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] bool? Comparable = null,
+    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] string? Reason = null,
+    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] string? Note = null);

@@ -5,4 +5,4 @@ namespace Bandtide.Server.Api;
 /// <param name="Name">Its name for people.</param>
 /// <param name="Stations">Codes of its stations.</param>
 /// <param name="Locators">Maidenhead fields and squares.</param>
-public sealed record RegionRequest(string? Code, string? Name, IReadOnlyList<string>? Stations, IReadOnlyList<string>? Locators);
+public sealed record RegionRequest(string? Code, string? Name, IReadOnlyList<string>? Stations = null, IReadOnlyList<string>? Locators = null);

@@ -18,8 +18,9 @@ namespace Bandtide.Server.Api;
 /// <param name="Antenna">Free text.</param>
 /// <param name="Note">Free text.</param>
 public sealed record SetupShape(
-    string? ValidFrom, string? Threshold, double? MarginDb, int? Averages, string? Detector, double? ResolutionHz,
-    double? NoiseBandwidthHz, double? RevisitSeconds, double? AntennaFactorDb, string? Environment, string? Receiver, string? Antenna, string? Note)
+    string? ValidFrom, string? Threshold = null, double? MarginDb = null, int? Averages = null, string? Detector = null, double? ResolutionHz = null,
+    double? NoiseBandwidthHz = null, double? RevisitSeconds = null, double? AntennaFactorDb = null, string? Environment = null, string? Receiver = null,
+    string? Antenna = null, string? Note = null)
 {
     internal static IReadOnlyList<string> Thresholds { get; } = ["fixed", "floor+margin"];
 

@@ -8,4 +8,4 @@ namespace Bandtide.Server.Api;
 /// <param name="LevelUnit"><c>dBm</c>, <c>dBuV</c>, <c>dBuV/m</c> or <c>dBFS</c>.</param>
 /// <param name="Regions">Lists to put it on; <c>itu-1</c> to <c>itu-3</c> declares its ITU Region.</param>
 public sealed record StationRequest(
-    string? Code, string? Name, double? Latitude, double? Longitude, string? LevelUnit, IReadOnlyList<string>? Regions);
+    string? Code, string? Name, double? Latitude, double? Longitude, string? LevelUnit, IReadOnlyList<string>? Regions = null);
