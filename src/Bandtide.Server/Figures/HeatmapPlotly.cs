@@ -15,6 +15,9 @@ namespace Bandtide.Server.Figures;
 internal static class HeatmapPlotly
 {
     private const string Clear = "rgba(0,0,0,0)";
+
+    // A hover label that does not fit into the chart is not shown at all: a picture of a few rows gets room below.
+    private const int HoverLabelHeight = 150;
     private const string CellTemplate = "<b>%{y}</b><br>%{x}<br>%{text}<extra></extra>";
 
     /// <summary>The heatmap, and over it the dots of few data.</summary>
@@ -30,11 +33,12 @@ internal static class HeatmapPlotly
     {
         ArgumentNullException.ThrowIfNull(figure);
         ArgumentNullException.ThrowIfNull(ink);
+        var below = Math.Max(0, HoverLabelHeight - HeatmapGeometry.PlotHeight(figure));
         return new()
         {
             AutoSize = true,
-            Height = HeatmapGeometry.PlotHeight(figure),
-            Margin = new() { L = 0, R = 0, T = 0, B = 0, Pad = 0 },
+            Height = HeatmapGeometry.PlotHeight(figure) + below,
+            Margin = new() { L = 0, R = 0, T = 0, B = below, Pad = 0 },
             PaperBgColor = Clear,
             PlotBgColor = Clear,
             ShowLegend = false,

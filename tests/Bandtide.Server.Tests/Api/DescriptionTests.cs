@@ -143,7 +143,7 @@ public sealed partial class DescriptionTests
         Assert.Equal(HttpStatusCode.OK, page.StatusCode);
         var html = await page.Content.ReadAsStringAsync(Ct);
         Assert.Contains("openapi/v1.json", html, StringComparison.Ordinal);
-        var sources = Source().Matches(html).Select(match => match.Groups[1].Value).ToList();
+        var sources = Source().Matches(html).Select(match => match.Groups["source"].Value).ToList();
         Assert.NotEmpty(sources);
         foreach (var source in sources)
         {
@@ -151,14 +151,14 @@ public sealed partial class DescriptionTests
             Assert.Equal(HttpStatusCode.OK, (await server.Visitor.GetAsync(new Uri(page.RequestMessage!.RequestUri!, source), Ct)).StatusCode);
         }
 
-        var nonce = Nonce().Match(Assert.Single(page.Headers.GetValues("Content-Security-Policy"))).Groups[1].Value;
+        var nonce = Nonce().Match(Assert.Single(page.Headers.GetValues("Content-Security-Policy"))).Groups["nonce"].Value;
         Assert.All(InlineScript().Matches(html), script => Assert.Contains($"nonce=\"{WebUtility.HtmlEncode(nonce)}\"", WebUtility.HtmlDecode(script.Value).Replace(nonce, WebUtility.HtmlEncode(nonce), StringComparison.Ordinal), StringComparison.Ordinal));
     }
 
-    [GeneratedRegex("src=[\"']([^\"']+)[\"']", RegexOptions.None, 1000)]
+    [GeneratedRegex("src=[\"'](?<source>[^\"']+)[\"']", RegexOptions.None, 1000)]
     private static partial Regex Source();
 
-    [GeneratedRegex("'nonce-([^']+)'", RegexOptions.None, 1000)]
+    [GeneratedRegex("'nonce-(?<nonce>[^']+)'", RegexOptions.None, 1000)]
     private static partial Regex Nonce();
 
     [GeneratedRegex("<script(?![^>]*src=)[^>]*>", RegexOptions.None, 1000)]

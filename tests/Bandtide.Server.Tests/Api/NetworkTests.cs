@@ -131,7 +131,7 @@ public sealed class NetworkTests
         Assert.True(JsonNode.DeepEquals(JsonNode.Parse(setup), Assert.Single(shown["setups"]!.AsArray())));
 
         const string day = "hour,band,sweeps,occupancy\n0,bc-49m,1,0\n";
-        Assert.Empty((await (await station.PutDayAsync("north", "2026-02-01", day)).JsonAsync())["warnings"]!.AsArray().Where(warning => warning!["rule"]!.GetValue<string>() is "no-setup" or "before-first-setup"));
+        Assert.Empty((await (await station.PutDayAsync("north", "2026-02-01", day)).JsonAsync())["warnings"]!.AsArray());
         Assert.Equal("before-first-setup", (await (await station.PutDayAsync("north", "2026-01-31", day)).JsonAsync())["warnings"]![0]!["rule"]!.GetValue<string>());
     }
 

@@ -1,6 +1,7 @@
 using System.Diagnostics;
 using System.Net;
 using System.Net.Sockets;
+using Bandtide.Server.Hosting;
 using Bandtide.Storage;
 using Bandtide.Testing;
 using Bandtide.Testing.Databases;

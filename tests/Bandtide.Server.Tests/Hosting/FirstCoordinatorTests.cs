@@ -20,7 +20,7 @@ public sealed partial class FirstCoordinatorTests
 
             var page = await browser.GetStringAsync(link, Ct);
             var field = Field().Match(page);
-            var form = new Dictionary<string, string>(StringComparer.Ordinal) { [field.Groups[1].Value] = WebUtility.HtmlDecode(field.Groups[2].Value) };
+            var form = new Dictionary<string, string>(StringComparer.Ordinal) { [field.Groups["name"].Value] = WebUtility.HtmlDecode(field.Groups["value"].Value) };
             using (var without = await browser.PostAsync(link, new FormUrlEncodedContent([]), Ct))
             {
                 Assert.Equal(HttpStatusCode.BadRequest, without.StatusCode);
@@ -39,7 +39,7 @@ public sealed partial class FirstCoordinatorTests
 
             using var made = await browser.PostAsync(link, new FormUrlEncodedContent(form), Ct);
             Assert.Equal(HttpStatusCode.OK, made.StatusCode);
-            var key = WebUtility.HtmlDecode(Code().Match(await made.Content.ReadAsStringAsync(Ct)).Groups[1].Value);
+            var key = WebUtility.HtmlDecode(Code().Match(await made.Content.ReadAsStringAsync(Ct)).Groups["key"].Value);
             Assert.True(made.Headers.CacheControl?.NoStore, "The page that shows the key must not be kept.");
             using var client = server.Client(key);
             using var station = await client.PostAsync(new Uri("stations", UriKind.Relative), Body("""{"code":"north","name":"N","latitude":1,"longitude":2,"levelUnit":"dBm"}""", "application/json"), Ct);
@@ -70,9 +70,9 @@ public sealed partial class FirstCoordinatorTests
         Assert.DoesNotContain(ServerHost.CoordinatorKey, said + server.Errors, StringComparison.Ordinal);
     }
 
-    [GeneratedRegex("name=\"([^\"]+)\" value=\"([^\"]+)\"", RegexOptions.None, 1000)]
+    [GeneratedRegex("name=\"(?<name>[^\"]+)\" value=\"(?<value>[^\"]+)\"", RegexOptions.None, 1000)]
     private static partial Regex Field();
 
-    [GeneratedRegex("<code>([^<]+)</code>", RegexOptions.None, 1000)]
+    [GeneratedRegex("<code>(?<key>[^<]+)</code>", RegexOptions.None, 1000)]
     private static partial Regex Code();
 }

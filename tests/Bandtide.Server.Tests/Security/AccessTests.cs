@@ -168,6 +168,6 @@ public sealed class AccessTests
         }
 
         Assert.Equal(2L, Convert.ToInt64(await server.Store.SqlAsync("SELECT count(*) FROM access_key"), System.Globalization.CultureInfo.InvariantCulture));
-        Assert.Equal(1, JsonNode.Parse(await (await server.Coordinator.GetAsync("stations/north/keys", null)).Content.ReadAsStringAsync(Ct))!.AsArray().Count);
+        Assert.Single(JsonNode.Parse(await (await server.Coordinator.GetAsync("stations/north/keys", null)).Content.ReadAsStringAsync(Ct))!.AsArray());
     }
 }
