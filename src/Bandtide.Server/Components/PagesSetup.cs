@@ -31,7 +31,10 @@ internal static class PagesSetup
     public static WebApplication MapPages(this WebApplication app)
     {
         app.MapStaticAssets();
-        app.MapRazorComponents<App>().AddInteractiveServerRenderMode();
+        app.MapRazorComponents<App>().AddInteractiveServerRenderMode(options =>
+
+            // The pages' own policy says it already, and more strictly.
+            options.ContentSecurityFrameAncestorsPolicy = null);
         return app;
     }
 }
