@@ -28,7 +28,7 @@ public sealed class BulkRobustnessTests
         {
             AssertSound(Read(new BulkCsvReader(SheetSamples.Context), csv, csv.Length));
             AssertSound(Read(new BulkJsonReader(SheetSamples.Context), json, json.Length));
-        }, iter: 4_000);
+        }, iter: 2_000);
 
     [Fact]
     public void Damaged_bodies_of_one_day_never_throw() => Gen.Select(CsvBody, JsonBody).Sample((csv, json) =>
@@ -38,7 +38,7 @@ public sealed class BulkRobustnessTests
         {
             Assert.Equal(reading.Sheet is null, reading.Problems.Count is > 0 and <= 100);
         }
-    }, iter: 4_000);
+    }, iter: 2_000);
 
     [Fact]
     public void Where_a_damaged_body_is_cut_changes_nothing() =>
@@ -88,7 +88,7 @@ public sealed class BulkRobustnessTests
                         Assert.Equal(3, Assert.Single(own).Reading.Sheet?.Cells.Count);
                     }
                 }
-            }, iter: 5_000);
+            }, iter: 2_000);
 
     private static Gen<byte[]> Damaged(Func<CellGrid[], byte[]> write) =>
         Gen.Select(SheetSamples.Grid.Array[1, 3], Damage.Array[0, 4]).Select((grids, damages) =>
