@@ -30,15 +30,33 @@ internal static class BitPlane
     /// <exception cref="PackException">The bytes cannot be such a block.</exception>
     public static void Read(ref PackReader reader, Span<int> target)
     {
-        int width = reader.Byte();
-        if (width > MaxWidth)
-        {
-            throw new PackException($"a width of {width} bits is impossible");
-        }
-
+        var width = Checked(reader.Byte());
         var least = reader.Int32();
         Unpack(reader.TakeOpen(ByteCount(target.Length, width)), target, least, width);
     }
+
+    /// <summary>Writes a block as <see cref="Write"/> does, but its least value in fewer bytes where that is near 0.</summary>
+    public static void WriteSmall(PackWriter writer, ReadOnlySpan<int> values)
+    {
+        var (least, width) = Frame(values);
+        writer.Byte(width);
+        writer.Signed(least);
+        Pack(writer.Reserve(ByteCount(values.Length, width)), values, least, width);
+    }
+
+    /// <summary>Reads what <see cref="WriteSmall"/> wrote.</summary>
+    /// <exception cref="PackException">The bytes cannot be such a block.</exception>
+    public static void ReadSmall(ref PackReader reader, Span<int> target)
+    {
+        var width = Checked(reader.Byte());
+        var least = reader.Signed();
+        Unpack(reader.TakeOpen(ByteCount(target.Length, width)), target, least, width);
+    }
+
+    /// <summary>A width that was read.</summary>
+    /// <exception cref="PackException">No difference is so wide.</exception>
+    public static int Checked(int width) =>
+        width is >= 0 and <= MaxWidth ? width : throw new PackException($"a width of {width} bits is impossible");
 
     /// <summary>Least value of a block and the bits that its differences need; both 0 for an empty one.</summary>
     public static (int Least, int Width) Frame(ReadOnlySpan<int> values)

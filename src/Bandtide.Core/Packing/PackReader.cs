@@ -15,22 +15,20 @@ internal ref struct PackReader(ReadOnlySpan<byte> bytes)
 
     public int Int32() => BinaryPrimitives.ReadInt32LittleEndian(Take(4));
 
-    /// <summary>A number from 0 to 2^28 - 1, seven bits a byte.</summary>
+    /// <summary>A number that is not negative.</summary>
     /// <exception cref="PackException">No such number stands here.</exception>
     public int Count()
     {
-        var value = 0;
-        for (var shift = 0; shift < 28; shift += 7)
-        {
-            int part = Byte();
-            value |= (part & 0x7F) << shift;
-            if (part < 0x80)
-            {
-                return value;
-            }
-        }
+        var value = Varying();
+        return value <= int.MaxValue ? (int)value : throw new PackException("a count is too large");
+    }
 
-        throw new PackException("a count is too large");
+    /// <summary>Any number.</summary>
+    /// <exception cref="PackException">No number stands here.</exception>
+    public int Signed()
+    {
+        var value = Varying();
+        return (int)(value >> 1) ^ -(int)(value & 1);
     }
 
     /// <exception cref="PackException">Fewer bytes are left.</exception>
@@ -48,5 +46,21 @@ internal ref struct PackReader(ReadOnlySpan<byte> bytes)
         var taken = rest;
         rest = rest[count..];
         return taken;
+    }
+
+    private uint Varying()
+    {
+        var value = 0uL;
+        for (var shift = 0; shift < 35; shift += 7)
+        {
+            ulong part = Byte();
+            value |= (part & 0x7F) << shift;
+            if (part < 0x80)
+            {
+                return value <= uint.MaxValue ? (uint)value : throw new PackException("a number is too large");
+            }
+        }
+
+        throw new PackException("a number is too long");
     }
 }

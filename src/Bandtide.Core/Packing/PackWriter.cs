@@ -19,17 +19,15 @@ internal sealed class PackWriter(int capacity = 1024)
 
     public void UInt32(uint value) => BinaryPrimitives.WriteUInt32LittleEndian(Reserve(4), value);
 
-    /// <summary>Writes a number from 0 to 2^28 - 1, seven bits a byte: small ones take one.</summary>
+    /// <summary>Writes a number that is not negative, seven bits a byte: small ones take one.</summary>
     public void Count(int value)
     {
-        ArgumentOutOfRangeException.ThrowIfGreaterThan((uint)value, (1u << 28) - 1, nameof(value));
-        for (; value >= 0x80; value >>= 7)
-        {
-            Byte(0x80 | (value & 0x7F));
-        }
-
-        Byte(value);
+        ArgumentOutOfRangeException.ThrowIfNegative(value);
+        Varying((uint)value);
     }
+
+    /// <summary>Writes any number, seven bits a byte: those near 0 on either side take one.</summary>
+    public void Signed(int value) => Varying((uint)((value << 1) ^ (value >> 31)));
 
     /// <summary>Writes what another writer holds, its length before it.</summary>
     public void Section(PackWriter section)
@@ -55,5 +53,15 @@ internal sealed class PackWriter(int capacity = 1024)
 
         Length += count;
         return buffer.AsSpan(Length - count, count);
+    }
+
+    private void Varying(uint value)
+    {
+        for (; value >= 0x80; value >>= 7)
+        {
+            Byte((int)(0x80 | (value & 0x7F)));
+        }
+
+        Byte((int)value);
     }
 }

@@ -4,8 +4,8 @@ namespace Bandtide.Core.Sheets;
 
 /// <summary>Many day sheets as one CSV body with a <c>date</c> column: consecutive rows of the same date text are one day.</summary>
 /// <remarks>
-/// A row whose quotes go wrong is split at its commas all the same, to find its date: it refuses its own day and no other. A
-/// row too short to reach its date belongs to the day being read, so that no day is kept without one of its rows.
+/// A row whose quotes or number of fields are wrong is split at its commas all the same, to find its date: it refuses its own
+/// day and no other. One that has no field for the date belongs to the day being read, lest that is kept without one of its rows.
 /// Empty lines are passed over.
 /// </remarks>
 public sealed class BulkCsvReader(SheetContext context) : IBulkReader
@@ -121,6 +121,12 @@ public sealed class BulkCsvReader(SheetContext context) : IBulkReader
     {
         row.Split(record, out var text);
         var isUnclosed = isOpen || (!row.IsWellFormed && records.InnerLines > 0);
+        if (isUnclosed)
+        {
+            row.SplitAtCommas(record);
+            text = record;
+        }
+
         if (header is null)
         {
             ReadHeader(text, isUnclosed);
@@ -158,21 +164,14 @@ public sealed class BulkCsvReader(SheetContext context) : IBulkReader
     // Goes on with the day being read or begins the next. False when that is one too many.
     private bool EnterDay(ReadOnlySpan<byte> record, ReadOnlySpan<byte> text, ICollection<BulkDay> completed)
     {
-        var isShort = row.Count <= header!.Date;
-        var dateText = isShort ? record : row.Fields[header.Date].Of(text);
-        if (!row.IsWellFormed && dateText.IndexOfAny(",\"\n"u8) is var end and >= 0)
-        {
-            // The quote stands in the date itself.
-            dateText = dateText[..end];
-        }
-
-        if (day is not null && (isShort || dateText.SequenceEqual(day.Text)))
+        var hasDate = TryFindDate(text, out var dateText);
+        if (day is not null && (!hasDate || dateText.SequenceEqual(day.Text)))
         {
             return true;
         }
 
         EndDay(completed);
-        day = new(context, dates, dateText, line);
+        day = new(context, dates, hasDate ? dateText : record, line);
         Stopped = dates.AreTooMany;
         if (Stopped)
         {
@@ -180,6 +179,26 @@ public sealed class BulkCsvReader(SheetContext context) : IBulkReader
         }
 
         return !Stopped;
+    }
+
+    // The date stands where the header says, or where that is counted from the end in a row of too few or too many fields.
+    private bool TryFindDate(ReadOnlySpan<byte> text, out ReadOnlySpan<byte> date)
+    {
+        date = FieldAt(header!.Date, text);
+        var other = FieldAt(header.Date + row.Count - header.Columns, text);
+        if (row.Count != header.Columns && !DateText.TryParse(date, out _) && DateText.TryParse(other, out _))
+        {
+            date = other;
+            return true;
+        }
+
+        return header.Date < row.Count;
+    }
+
+    private ReadOnlySpan<byte> FieldAt(int column, ReadOnlySpan<byte> text)
+    {
+        var field = column < 0 || column >= row.Count ? default : row.Fields[column].Of(text);
+        return row.IsWellFormed ? field : field.Trim((byte)'"');
     }
 
     private void EndDay(ICollection<BulkDay> completed)

@@ -36,6 +36,19 @@ internal sealed class CsvRow
         }
     }
 
+    /// <summary>Splits a record whose quotes cannot be made sense of: at every comma of its first line, quotes left in.</summary>
+    /// <param name="record">The record, which the slices point into.</param>
+    public void SplitAtCommas(ReadOnlySpan<byte> record)
+    {
+        (Count, IsWellFormed, IsUtf8) = (0, false, Utf8.IsValid(record));
+        var end = record.IndexOf((byte)'\n');
+        var line = CsvRecordFinder.WithoutReturn(end < 0 ? record : record[..end]);
+        foreach (var field in line.Split((byte)','))
+        {
+            Add(new(field.Start.Value, field.End.Value - field.Start.Value));
+        }
+    }
+
     // False at a quote. Commas are found for 32 bytes at a time, and bytes beyond ASCII on the way.
     private bool SplitPlain(ReadOnlySpan<byte> record)
     {

@@ -20,7 +20,6 @@ internal static class SheetFormat1
 {
     public const byte Version = 1;
 
-    private const int MaxBands = short.MaxValue;
     private const int Always = (1 << (int)Quantity.Sweeps) | (1 << (int)Quantity.Occupancy);
 
     // A reference comes before what leans on it.
@@ -122,8 +121,8 @@ internal static class SheetFormat1
             (least[b], widths[b]) = block.IsEmpty && b > 0 ? (least[b - 1], 0) : BitPlane.Frame(block);
         }
 
-        BitPlane.Write(writer, least);
-        BitPlane.Write(writer, widths);
+        BitPlane.WriteSmall(writer, least);
+        BitPlane.WriteSmall(writer, widths);
         count = 0;
         for (var b = 0; b < masks.Length; b++)
         {
@@ -143,8 +142,8 @@ internal static class SheetFormat1
         }
 
         var (least, widths) = (new int[masks.Length], new int[masks.Length]);
-        BitPlane.Read(ref reader, least);
-        BitPlane.Read(ref reader, widths);
+        BitPlane.ReadSmall(ref reader, least);
+        BitPlane.ReadSmall(ref reader, widths);
         var plane = new int[CellGrid.Hours * masks.Length];
         if (masks.ContainsAnyExcept(HourMasks.AllHours))
         {
@@ -154,13 +153,9 @@ internal static class SheetFormat1
         Span<int> block = stackalloc int[CellGrid.Hours];
         for (var b = 0; b < masks.Length; b++)
         {
-            if ((uint)widths[b] > BitPlane.MaxWidth)
-            {
-                throw new PackException($"a width of {widths[b]} bits is impossible");
-            }
-
+            var width = BitPlane.Checked(widths[b]);
             var values = block[..BitOperations.PopCount((uint)masks[b])];
-            BitPlane.Unpack(reader.TakeOpen(BitPlane.ByteCount(values.Length, widths[b])), values, least[b], widths[b]);
+            BitPlane.Unpack(reader.TakeOpen(BitPlane.ByteCount(values.Length, width)), values, least[b], width);
             Scatter(values, masks[b], plane.AsSpan(b), masks.Length);
         }
 
@@ -211,7 +206,7 @@ internal static class SheetFormat1
         var runs = new List<(int Gap, int Length)>();
         for (var b = 0; b < bandIds.Length; b++)
         {
-            var gap = bandIds[b] - (b == 0 ? short.MinValue : bandIds[b - 1] + 1);
+            var gap = bandIds[b] - (b == 0 ? 0 : bandIds[b - 1] + 1);
             if (b > 0 && gap == 0)
             {
                 runs[^1] = (runs[^1].Gap, runs[^1].Length + 1);
@@ -225,7 +220,7 @@ internal static class SheetFormat1
         writer.Count(runs.Count);
         foreach (var (gap, length) in runs)
         {
-            writer.Count(gap);
+            writer.Signed(gap);
             writer.Count(length);
         }
     }
@@ -233,12 +228,12 @@ internal static class SheetFormat1
     private static short[] ReadBands(ref PackReader reader)
     {
         var bandIds = new List<short>();
-        int next = short.MinValue;
+        long next = 0;
         for (var runs = reader.Count(); runs > 0; runs--)
         {
-            next += reader.Count();
+            next += reader.Signed();
             var length = reader.Count();
-            if (next > short.MaxValue || length > MaxBands - bandIds.Count || next + length - 1 > short.MaxValue)
+            if (next < (bandIds.Count == 0 ? short.MinValue : bandIds[^1] + 1) || next + length - 1 > short.MaxValue)
             {
                 throw new PackException("a band identity is impossible");
             }

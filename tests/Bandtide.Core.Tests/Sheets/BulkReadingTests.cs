@@ -1,38 +1,15 @@
 using System.Buffers;
-using System.Globalization;
 using System.Text;
 using Bandtide.Core.Bands;
 using Bandtide.Core.Sheets;
 using Bandtide.Core.Time;
-using Bandtide.Testing;
 using CsCheck;
-using nietras.SeparatedValues;
 
 namespace Bandtide.Core.Tests.Sheets;
 
 public sealed class BulkReadingTests
 {
     private const string Header = "date,hour,band,sweeps,occupancy\n";
-
-    // Reference: the Sep library splits the same file; measured data, see Measured/README.md.
-    [Fact]
-    public void A_measured_file_is_read_in_full()
-    {
-        var body = File.ReadAllBytes(MeasuredData.Tokyo);
-        var days = ReadCsv(body, 1000);
-        Assert.All(days, day => Assert.Empty(day.Reading.Problems));
-        using var reference = Sep.Reader().From(body);
-        var (rows, signal) = (0, 0m);
-        foreach (var row in reference)
-        {
-            rows++;
-            signal += row["signal"].Span.IsEmpty ? 0 : decimal.Parse(row["signal"].Span, CultureInfo.InvariantCulture);
-        }
-
-        Assert.Equal(10, days.Count);
-        Assert.Equal(rows, days.Sum(day => day.Reading.Sheet!.Cells.Count));
-        Assert.Equal(signal * 100, days.Sum(day => day.Reading.Sheet!.Cells.Plane(Quantity.Signal).ToArray().Where(v => v != CellGrid.Missing).Sum(v => (decimal)v)));
-    }
 
     [Fact]
     public void Cutting_a_body_anywhere_changes_nothing() =>
@@ -79,6 +56,94 @@ public sealed class BulkReadingTests
         Assert.Equal("2026-01-01 2026-01-02", string.Join(" ", days.Select(day => day.DateText)));
         Assert.NotNull(days[0].Reading.Sheet);
         Assert.Equal((3, "", SheetRule.QuoteUnclosed), One(days[1]));
+    }
+
+    [Theory]
+    [InlineData("2026-01-02,0,b\"c-49m,1,0\n", SheetRule.QuoteSyntax)]
+    [InlineData("\"2026-01-02\",0,bc\"-49m,1,0\n", SheetRule.QuoteSyntax)]
+    [InlineData("2026-01-02,0\n", SheetRule.FieldCount)]
+    public void A_row_that_cannot_be_split_still_refuses_the_day_of_its_date(string row, string rule)
+    {
+        var days = ReadCsv(Header + "2026-01-01,0,bc-49m,1,0\n" + row + "2026-01-02,1,bc-49m,1,0\n2026-01-03,0,bc-49m,1,0\n");
+        Assert.Equal("2026-01-01 2026-01-02 2026-01-03", string.Join(' ', days.Select(day => day.DateText)));
+        Assert.Equal([true, false, true], days.Select(day => day.Reading.Sheet is not null));
+        Assert.Equal((3, "", rule), One(days[1]));
+    }
+
+    [Theory]
+    [InlineData("\"2026-01-02\",0,\"bc-49m,1,0\n")]
+    [InlineData("2026-01-02,0,\"bc-49m,1,0\n2026-01-02,1,\"bc-49m\",1,0\n")]
+    [InlineData("\"2026-01-02,0,bc-49m,1,0\n")]
+    public void An_open_quote_leaves_the_day_before_its_own_alone(string row)
+    {
+        var days = ReadCsv(Header + "2026-01-01,0,bc-49m,1,0\n" + row);
+        Assert.Equal("2026-01-01 2026-01-02", string.Join(' ', days.Select(day => day.DateText)));
+        Assert.NotNull(days[0].Reading.Sheet);
+        Assert.Equal((3, "", SheetRule.QuoteUnclosed), One(days[1], day => day.Rule is SheetRule.QuoteUnclosed));
+    }
+
+    [Theory]
+    [InlineData("1,bc-49m,2026-01-02\n", "2026-01-01 2026-01-02")]
+    [InlineData("1,bc-49m,1,0,5,2026-01-02\n", "2026-01-01 2026-01-02")]
+    [InlineData("1,bc-49m\n", "2026-01-01")]
+    public void A_row_of_too_few_or_too_many_fields_refuses_the_day_whose_date_it_has_or_the_one_being_read(string row, string dates)
+    {
+        var days = ReadCsv("hour,band,sweeps,occupancy,date\n0,bc-49m,1,0,2026-01-01\n" + row);
+        Assert.Equal(dates, string.Join(' ', days.Select(day => day.DateText)));
+        Assert.Equal((3, "", SheetRule.FieldCount), One(days[^1]));
+        Assert.All(days.SkipLast(1), day => Assert.NotNull(day.Reading.Sheet));
+    }
+
+    [Fact]
+    public void A_text_that_is_no_date_is_shown_cut()
+    {
+        var day = Assert.Single(ReadCsv(Header + new string('é', 500) + ",0,bc-49m,1,0\n"));
+        Assert.Equal(new string('é', 32) + "…", day.DateText);
+    }
+
+    [Fact]
+    public void A_day_over_two_megabytes_is_refused_and_the_next_one_read()
+    {
+        var note = new string('x', 100_000);
+        var rows = string.Concat(Enumerable.Range(0, 24).Select(hour => $"2026-01-01,{hour},bc-49m,1,0,{note}\n"));
+        var days = ReadCsv(Encoding.UTF8.GetBytes("date,hour,band,sweeps,occupancy,note\n" + rows + "2026-01-02,0,bc-49m,1,0,\n"), 4096);
+        Assert.Equal((21, "", SheetRule.DayTooLarge), One(days[0]));
+        Assert.NotNull(days[1].Reading.Sheet);
+    }
+
+    [Fact]
+    public void A_date_that_comes_again_in_json_is_refused_there()
+    {
+        const string cells = "\"cells\":[{\"hour\":0,\"band\":\"bc-49m\",\"sweeps\":1,\"occupancy\":0}]";
+        var days = Read(new BulkJsonReader(SheetSamples.Context), Encoding.UTF8.GetBytes($"{{\"date\":\"2026-01-01\",{cells}}}\n{{{cells},\"date\":\"2026-01-02\"}}\n{{\"date\":\"2026-01-01\",{cells}}}\n"), 10);
+        Assert.Equal([true, true, false], days.Select(day => day.Reading.Sheet is not null));
+        Assert.Equal((0, "date", SheetRule.DateAgain), One(days[2]));
+    }
+
+    [Fact]
+    public void A_json_date_that_is_none_is_shown()
+    {
+        var day = Assert.Single(Read(new BulkJsonReader(SheetSamples.Context), "{\"date\":\"2026-13-01\",\"cells\":[]}"u8.ToArray(), 100));
+        Assert.Equal(("2026-13-01", null), (day.DateText, day.Date));
+    }
+
+    [Fact]
+    public void A_header_of_very_many_columns_is_told_in_bounded_words()
+    {
+        var reader = new BulkCsvReader(SheetSamples.Context);
+        Assert.Empty(Read(reader, Encoding.UTF8.GetBytes(string.Concat(Enumerable.Repeat("hour,", 200_000)) + "\n"), 60_000));
+        Assert.Equal(100, reader.HeaderProblems.Count);
+    }
+
+    // Work that grows with the square of a record's pieces would take hours here: 1.9 MB in pieces of seven bytes.
+    [Theory]
+    [InlineData(true)]
+    [InlineData(false)]
+    public void A_long_record_in_tiny_pieces_is_looked_at_once(bool json)
+    {
+        IBulkReader reader = json ? new BulkJsonReader(SheetSamples.Context) : new BulkCsvReader(SheetSamples.Context);
+        var body = Encoding.UTF8.GetBytes((json ? "{\"note\":\"" : Header + "2026-01-01,0,\"") + new string(json ? 'x' : '\n', 1_900_000));
+        Assert.Equal(json ? SheetRule.JsonSyntax : SheetRule.QuoteUnclosed, One(Assert.Single(Read(reader, body, 7))).Rule);
     }
 
     [Theory]
@@ -153,6 +218,9 @@ public sealed class BulkReadingTests
         byte[] body = json ? bytes : [.. Encoding.UTF8.GetBytes(Header), .. bytes];
         Assert.All(Read(reader, body, chunk), day => Assert.Equal(day.Reading.Sheet is null, day.Reading.Problems.Count > 0));
     }, iter: 20_000);
+
+    private static (int Line, string Field, string Rule) One(BulkDay day, Func<SheetProblem, bool> wanted) =>
+        day.Reading.Problems.Where(wanted).Select(problem => (problem.Line, problem.Field, problem.Rule)).Single();
 
     private static (int Line, string Field, string Rule) One(BulkDay day) =>
         (Assert.Single(day.Reading.Problems).Line, day.Reading.Problems[0].Field, day.Reading.Problems[0].Rule);

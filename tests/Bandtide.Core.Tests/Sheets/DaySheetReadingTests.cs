@@ -117,6 +117,60 @@ public sealed class DaySheetReadingTests
         Assert.Equal((SheetRule.ColumnUnknown, 1), (Assert.Single(reading.Warnings).Rule, reading.Warnings[0].Count));
     }
 
+    [Fact]
+    public void Empty_columns_that_spreadsheets_leave_are_unknown_ones()
+    {
+        var reading = Read("hour,band,sweeps,occupancy,,\n0,bc-49m,720,0.4,,\n");
+        Assert.NotNull(reading.Sheet);
+        Assert.Equal((SheetRule.ColumnUnknown, 2), (Assert.Single(reading.Warnings).Rule, reading.Warnings[0].Count));
+    }
+
+    [Theory]
+    [InlineData(" 0,bc-49m,720,0.4", "hour", SheetRule.HourRange)]
+    [InlineData("0,bc-49m ,720,0.4", "band", SheetRule.BandUnknown)]
+    [InlineData("0,bc-49m,720, 0.4", "occupancy", SheetRule.NumberSyntax)]
+    [InlineData("0,bc-49m,1 000,0.4", "sweeps", SheetRule.NumberSyntax)]
+    public void Blanks_around_or_inside_a_value_are_refused(string row, string field, string rule)
+    {
+        var problem = Assert.Single(Read("hour,band,sweeps,occupancy\n" + row).Problems);
+        Assert.Equal((2, field, rule), (problem.Line, problem.Field, problem.Rule));
+    }
+
+    // A value that would round into its range is outside it all the same; order is judged as written, however fine.
+    [Theory]
+    [InlineData("300.004,300.004", SheetRule.DecibelRange)]
+    [InlineData("-80.001,-80.002", SheetRule.P90BelowLevel)]
+    [InlineData("-80.00000000001,-80.00000000002", SheetRule.P90BelowLevel)]
+    [InlineData("-80.002,-80.001", "")]
+    [InlineData("-80.0000,-8e1", "")]
+    public void Ranges_and_order_are_judged_before_rounding(string values, string rule)
+    {
+        var problems = Read("hour,band,sweeps,occupancy,level,level_p90\n0,bc-49m,720,0.4," + values).Problems;
+        Assert.Equal(rule, string.Join(' ', problems.Select(problem => problem.Rule).Distinct(StringComparer.Ordinal)));
+    }
+
+    [Fact]
+    public void Values_are_rounded_half_away_from_zero()
+    {
+        var cells = Read("hour,band,sweeps,occupancy,signal,level\n0,bc-49m,720,0.00005,-78.605,78.605").Sheet!.Cells;
+        Assert.Equal((1, -7861, 7861), (cells[Quantity.Occupancy, 0, 0], cells[Quantity.Signal, 0, 0], cells[Quantity.Level, 0, 0]));
+    }
+
+    [Fact]
+    public void Escapes_and_nulls_of_json_are_read()
+    {
+        const string body = "{\"cells\":[{\"b\\u0061nd\":\"bc\\u002d49m\",\"occupancy\":5e-1,\"hour\":2,\"sweeps\":720,\"signal\":null}],\"date\":\"2026-06-01\"}";
+        var cells = DaySheetJson.Read(Encoding.UTF8.GetBytes(body), SheetSamples.Date, SheetSamples.Context).Sheet!.Cells;
+        Assert.Equal((5000, CellGrid.Missing), (cells[Quantity.Occupancy, 2, 0], cells[Quantity.Signal, 2, 0]));
+    }
+
+    [Fact]
+    public void Lines_are_those_of_the_body_with_quoted_line_ends_and_empty_lines()
+    {
+        var problem = Assert.Single(Read("hour,band,sweeps,occupancy,note\r\n0,bc-49m,720,0.4,\"two\r\nlines\"\r\n\r\n99,bc-41m,720,0.4,\r\n").Problems);
+        Assert.Equal((5, "hour"), (problem.Line, problem.Field));
+    }
+
     [Theory]
     [InlineData("2026-06-01T10:04:59Z", 9, true)]
     [InlineData("2026-06-01T09:55:00Z", 9, true)]

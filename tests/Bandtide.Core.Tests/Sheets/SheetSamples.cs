@@ -33,6 +33,20 @@ internal static class SheetSamples
     public static bool Same(CellGrid a, CellGrid b) =>
         a.BandIds.SequenceEqual(b.BandIds) && Enum.GetValues<Quantity>().All(quantity => a.Plane(quantity).SequenceEqual(b.Plane(quantity)));
 
+    /// <summary>One of some texts.</summary>
+    public static Gen<string> OneOf(params string[] texts) => Gen.Int[0, texts.Length - 1].Select(n => texts[n]);
+
+    /// <summary>A day with every cell and every value, each quantity of a different spread.</summary>
+    public static CellGrid Full(IEnumerable<Band> bands, Random random)
+    {
+        var ids = bands.Select(band => band.Id).Order().ToArray();
+        var size = CellGrid.Hours * ids.Length;
+        int[] Plane(int low, int high) => [.. Enumerable.Range(0, size).Select(_ => random.Next(low, high + 1))];
+        var (floor, above, further) = (Plane(-12_000, -8_000), Plane(0, 700), Plane(0, 3_000));
+        var level = floor.Zip(above, (a, b) => a + b).ToArray();
+        return new(ids, [Plane(717, 720), Plane(0, 10_000), Plane(-9_000, -3_000), level, [.. level.Zip(further, (a, b) => a + b)], floor, Plane(0, 1), Plane(10_000, 10_000)]);
+    }
+
     private static Gen<int> Optional(Gen<int> gen) => Gen.Frequency((1, Gen.Const(CellGrid.Missing)), (4, gen));
 
     // Bands without a cell are dropped, as a reader does.
