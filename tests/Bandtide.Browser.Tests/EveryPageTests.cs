@@ -51,6 +51,8 @@ public sealed class EveryPageTests(PublicSite site)
             await visit.ChartAsync();
         }
 
+        // The scanner itself adds styles that the page's policy refuses: what it causes is not the page's.
+        Assert.Empty(visit.Complaints);
         var found = await visit.Page.RunAxe();
         Assert.True(found.Violations.Length == 0, string.Join('\n', found.Violations.Select(one =>
             $"{one.Id}: {one.Help} at {string.Join(", ", one.Nodes.Select(node => node.Html).Take(3))}")));
@@ -58,7 +60,6 @@ public sealed class EveryPageTests(PublicSite site)
 
         var sizes = await visit.Page.EvaluateAsync<int[]>("[document.documentElement.scrollWidth, document.documentElement.clientWidth]");
         Assert.Equal(sizes[1], sizes[0]);
-        Assert.Empty(visit.Complaints);
     });
 
     [Theory]
@@ -70,10 +71,10 @@ public sealed class EveryPageTests(PublicSite site)
         var response = await visit.Page.GotoAsync(address);
         Assert.Equal(404, response!.Status);
         await Assertions.Expect(visit.Page.GetByRole(AriaRole.Heading, new() { Name = "No such page" })).ToBeVisibleAsync();
-        Assert.Empty((await visit.Page.RunAxe()).Violations);
 
         // The browser itself complains of the status, and of nothing else.
         Assert.All(visit.Complaints, complaint => Assert.Contains("404", complaint, StringComparison.Ordinal));
+        Assert.Empty((await visit.Page.RunAxe()).Violations);
     });
 
     [Fact]

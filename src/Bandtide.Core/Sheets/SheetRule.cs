@@ -84,6 +84,9 @@ public static class SheetRule
     /// <summary>One body holds at most 4,000 days.</summary>
     public const string TooManyDays = "too-many-days";
 
+    /// <summary>The body ended in the middle of the day.</summary>
+    public const string BodyIncomplete = "body-incomplete";
+
     /// <summary>Warning: signal is below level.</summary>
     public const string SignalBelowLevel = "signal-below-level";
 

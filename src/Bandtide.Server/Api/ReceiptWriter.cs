@@ -17,6 +17,7 @@ internal sealed class ReceiptWriter(HttpContext context, TimeSpan patience, Time
     private readonly Channel<KeptLine> lines = Channel.CreateUnbounded<KeptLine>(new() { SingleReader = true });
     private readonly CancellationTokenSource stalled = new(Timeout.InfiniteTimeSpan, clock);
     private Task? sending;
+    private static readonly TimeSpan Linger = TimeSpan.FromSeconds(1);
     private volatile bool ending;
     private long kept;
 
@@ -36,6 +37,9 @@ internal sealed class ReceiptWriter(HttpContext context, TimeSpan patience, Time
     public async Task BreakOffAsync()
     {
         await FinishAsync();
+
+        // A reset makes the other side throw away what it has not read yet.
+        await Task.Delay(Linger);
         context.Abort();
     }
 
