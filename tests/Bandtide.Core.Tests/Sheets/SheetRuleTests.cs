@@ -65,6 +65,9 @@ public sealed class SheetRuleTests
         var warnings = new[]
         {
             SheetRule.ColumnUnknown, SheetRule.SignalBelowLevel, SheetRule.LevelAboveThreshold, SheetRule.NoSetup, SheetRule.BeforeFirstSetup, SheetRule.CopiedDay,
+
+            // Needs a connection that breaks: see the tests of bulk uploads over the network.
+            SheetRule.BodyIncomplete,
         };
         var all = typeof(SheetRule).GetFields(BindingFlags.Public | BindingFlags.Static).Select(constant => (string)constant.GetRawConstantValue()!).ToArray();
         Assert.Equal(all.Order(StringComparer.Ordinal), Broken.Select(row => row.Data.Item5).Concat(warnings).Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal));
