@@ -2,6 +2,7 @@ using Bandtide.Browser.Tests.Screens;
 using Bandtide.Browser.Tests.Site;
 using Bandtide.Server.Demo;
 using Bandtide.Server.Tests.Hosting;
+using Bandtide.Testing;
 using Bandtide.Testing.Databases;
 using Microsoft.Playwright;
 
