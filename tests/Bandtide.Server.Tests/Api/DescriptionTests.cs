@@ -136,13 +136,14 @@ public sealed partial class DescriptionTests
 
     // What an outsider sees of the page behind "API reference": nothing comes from elsewhere.
     [Fact]
-    public async Task The_readable_page_needs_no_other_host()
+    public async Task The_readable_page_tells_every_call_and_needs_no_other_host()
     {
         await using var server = await ServerHost.StartAsync(StoreKind.Sqlite);
         using var page = await server.Visitor.GetAsync("/reference", "text/html");
         Assert.Equal(HttpStatusCode.OK, page.StatusCode);
         var html = await page.Content.ReadAsStringAsync(Ct);
         Assert.Contains("openapi/v1.json", html, StringComparison.Ordinal);
+        Assert.All(await CallsAsync(server), call => Assert.Contains(call.Call["summary"]!.GetValue<string>(), WebUtility.HtmlDecode(html), StringComparison.Ordinal));
         var sources = Source().Matches(html).Select(match => match.Groups["source"].Value).ToList();
         Assert.NotEmpty(sources);
         foreach (var source in sources)
