@@ -17,7 +17,7 @@ internal static class ApiExamples
         """{"station":"north-hut","date":"2026-06-01","status":"created","revision":1,"cells":1,"checksum":"2c1f0e3b5d7a9c8e0f1a2b3c4d5e6f70","warnings":[{"rule":"no-setup","count":1,"hour":null,"band":null,"message":"The station has told no setup; tell what is connected and how it measures."}]}""";
 
     private const string Setup =
-        """{"validFrom":"2026-05-01","threshold":"floor+margin","marginDb":5,"averages":8,"detector":"power","resolutionHz":1000,"noiseBandwidthHz":1500,"revisitSeconds":5,"environment":"rural","receiver":"wide-band receiver, 16 bit","antenna":"active vertical, 1 m","note":"lightning arrestor fitted"}""";
+        """{"validFrom":"2026-05-01","threshold":"floor+margin","marginDb":5,"averages":8,"detector":"power","resolutionHz":1000,"noiseBandwidthHz":1500,"revisitSeconds":5,"antennaFactorDb":12.5,"environment":"rural","receiver":"wide-band receiver, 16 bit","antenna":"active vertical, 1 m","note":"lightning arrestor fitted"}""";
 
     private const string Station =
         """{"code":"north-hut","name":"North hut","locator":"KO33","levelUnit":"dBm","ituRegion":1,"regions":["all","field-ko","itu-1","square-ko33"],"setups":[]}""";

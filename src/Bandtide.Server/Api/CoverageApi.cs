@@ -17,6 +17,7 @@ internal static class CoverageApi
 
     public static void MapCoverage(this IEndpointRouteBuilder routes) =>
         routes.MapGet("/coverage", GetAsync).WithName("getCoverage").WithTags("Coverage").WithSummary("Who reported when, station by day")
+            .WithDescription("Hours, cells and bands have a row per station and an entry per date: null where nothing was ever sent, 0 where the day was withdrawn. CSV has a line for each day that was sent.")
             .Produces<CoverageShape>(200, Json, Csv).Produces(304).Refuses(400, 404, 406);
 
     private static async Task<IResult> GetAsync(

@@ -17,6 +17,7 @@ internal static class HeatmapApi
     public static void MapHeatmap(this IEndpointRouteBuilder routes) =>
         routes.MapGet("/heatmap", GetAsync).WithName("getHeatmap").WithTags("Heatmap")
             .WithSummary("Hour-by-band values pooled over stations and days, as numbers or as a picture")
+            .WithDescription("Every list of lists has a row per band and 24 entries per row. Numbers are rounded to six decimals, a hundred times finer than what is stored; null means not observed. lower and upper are the 95 % interval of a mean. comparable is there, and false, where levels of these stations must not be compared; note says what else a reader should know.")
             .Produces<HeatmapShape>(200, Json, Csv, Svg).Produces(304).Refuses(400, 404, 406);
 
     private static async Task<IResult> GetAsync(HttpContext context, HeatmapReader reader, NetworkStore network, CancellationToken ct)
