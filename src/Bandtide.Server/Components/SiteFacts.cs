@@ -1,3 +1,4 @@
+using Bandtide.Server.Demo;
 using Bandtide.Storage.Network;
 
 namespace Bandtide.Server.Components;
@@ -6,7 +7,7 @@ namespace Bandtide.Server.Components;
 internal sealed class SiteFacts(NetworkStore network)
 {
     /// <summary>Code of the region that marks a store as filled with the invented scenario: it lives and goes with that data.</summary>
-    public const string DemonstrationRegion = "demonstration";
+    public const string DemonstrationRegion = DemoScenario.Region;
 
     private volatile bool isDemonstration;
 
