@@ -1,6 +1,7 @@
 using System.Globalization;
 using System.Text;
 using Bandtide.Core.Heatmaps;
+using Bandtide.Server.Demo;
 using Bandtide.Server.Figures;
 using Bandtide.Storage.Heatmaps;
 using Bandtide.Storage.Network;
@@ -98,7 +99,13 @@ internal static class HeatmapApi
         // A club's own site may show it, as a picture or in a frame.
         context.Response.Headers["Cross-Origin-Resource-Policy"] = "cross-origin";
         context.Response.Headers.ContentSecurityPolicy = "default-src 'none'";
-        return Results.Text(HeatmapSvg.Render(HeatmapFigure.Of(answer, FigureWords.PlaceName(network, answer.Query))), Svg, Encoding.UTF8);
+        var figure = HeatmapFigure.Of(answer, FigureWords.PlaceName(network, answer.Query));
+
+        // Elsewhere no page stands around the picture to say so.
+        return Results.Text(
+            HeatmapSvg.Render(network.FindRegion(DemoScenario.Region) is null ? figure : figure with { Caption = [.. figure.Caption, "Invented demonstration data."] }),
+            Svg,
+            Encoding.UTF8);
     }
 
     internal static HeatmapShape Shape(HeatmapAnswer answer)
