@@ -78,6 +78,11 @@ public sealed record HeatmapFigure(
             yield return Behind(answer);
         }
 
+        if (answer.Query is { Clock: HourClock.Solar, Station: null } && answer.Heatmap.Bands.Count > 0)
+        {
+            yield return "Columns are hours of each station's own solar time: noon is when the Sun is highest there.";
+        }
+
         if (daylight is not null && answer.Heatmap.Bands.Count > 0)
         {
             yield return daylight.Sentence;
