@@ -11,6 +11,8 @@ var commands = new Dictionary<string, Func<Task>>(StringComparer.Ordinal)
     ["bulk"] = () => EachStoreAsync(UploadBenchmarks.BulkAsync),
     ["store"] = () => EachStoreAsync((kind, _) => UploadBenchmarks.StoreAsync(kind)),
     ["heatmap"] = () => EachStoreAsync((kind, _) => HeatmapBenchmarks.RunAsync(kind, stations: 1000)),
+    ["pooling"] = PoolingBenchmark.RunAsync,
+    ["interval-coverage"] = CoverageBenchmark.RunAsync,
     ["start"] = StartBenchmark.RunAsync,
 };
 

@@ -27,10 +27,12 @@ internal sealed class DateTable
         var count = 0;
         foreach (var (day, month, planes) in dates)
         {
-            if (planes.Weights[cell] > 0)
+            var weight = planes.Weights[cell] + planes.FullWeight;
+            if (weight > 0)
             {
-                (days[count], months[count], weights[count], counts[count]) = (day, month, planes.Weights[cell], planes.Counts[cell]);
-                deviations[count] = planes.Counts[cell] > 0 ? planes.Deviations[cell] / planes.Counts[cell] : float.NaN;
+                var stations = planes.Counts[cell] + planes.FullCount;
+                (days[count], months[count], weights[count], counts[count]) = (day, month, weight, stations);
+                deviations[count] = stations > 0 ? planes.Deviations[cell] / stations : float.NaN;
                 count++;
             }
         }

@@ -33,9 +33,39 @@ internal static class DayKernel
     /// <summary>Takes out the cells with too few sweeps.</summary>
     public static void DropFew(Span<int> row, ReadOnlySpan<int> sweeps, int minSweeps)
     {
-        for (var i = 0; i < row.Length; i++)
+        sweeps = sweeps[..row.Length];
+        var i = 0;
+        for (; i <= row.Length - Lanes; i += Lanes)
+        {
+            var few = Vector256.LessThan(Vector256.LoadUnsafe(in sweeps[i]), Vector256.Create(minSweeps));
+            Vector256.ConditionalSelect(few, Missing, Vector256.LoadUnsafe(in row[i])).StoreUnsafe(ref row[i]);
+        }
+
+        for (; i < row.Length; i++)
         {
             row[i] = sweeps[i] < minSweeps ? CellGrid.Missing : row[i];
+        }
+    }
+
+    /// <summary>Widens the range of each cell to hold a day's values.</summary>
+    public static void AddExtremes(ReadOnlySpan<int> row, Span<int> lows, Span<int> highs)
+    {
+        lows = lows[..row.Length];
+        highs = highs[..row.Length];
+        var i = 0;
+        for (; i <= row.Length - Lanes; i += Lanes)
+        {
+            // The mark of a missing value is the least of all numbers: it never raises a high, and is kept from the lows.
+            var value = Vector256.LoadUnsafe(in row[i]);
+            var low = Vector256.ConditionalSelect(Vector256.Equals(value, Missing), Vector256.Create(int.MaxValue), value);
+            Vector256.Min(Vector256.LoadUnsafe(in lows[i]), low).StoreUnsafe(ref lows[i]);
+            Vector256.Max(Vector256.LoadUnsafe(in highs[i]), value).StoreUnsafe(ref highs[i]);
+        }
+
+        for (; i < row.Length; i++)
+        {
+            lows[i] = row[i] == CellGrid.Missing ? lows[i] : Math.Min(lows[i], row[i]);
+            highs[i] = Math.Max(highs[i], row[i]);
         }
     }
 
@@ -93,6 +123,32 @@ internal static class DayKernel
         {
             days[i] += monthDays[i];
             sums[i] += monthSums[i];
+        }
+    }
+
+    /// <summary>Adds a day's deviations from the station's month, where every cell has a value.</summary>
+    /// <param name="row">The values.</param>
+    /// <param name="means">The station's mean in the month.</param>
+    /// <param name="deviations">Sums of the deviations of the date.</param>
+    /// <param name="squares">Sum of the squared deviations.</param>
+    public static void AddFullDeviations(ReadOnlySpan<int> row, ReadOnlySpan<float> means, Span<float> deviations, Span<float> squares)
+    {
+        means = means[..row.Length];
+        deviations = deviations[..row.Length];
+        squares = squares[..row.Length];
+        var i = 0;
+        for (; i <= row.Length - Lanes; i += Lanes)
+        {
+            var deviation = Vector256.ConvertToSingle(Vector256.LoadUnsafe(in row[i])) - Vector256.LoadUnsafe(in means[i]);
+            (Vector256.LoadUnsafe(in deviations[i]) + deviation).StoreUnsafe(ref deviations[i]);
+            (Vector256.LoadUnsafe(in squares[i]) + deviation * deviation).StoreUnsafe(ref squares[i]);
+        }
+
+        for (; i < row.Length; i++)
+        {
+            var deviation = row[i] - means[i];
+            deviations[i] += deviation;
+            squares[i] += deviation * deviation;
         }
     }
 

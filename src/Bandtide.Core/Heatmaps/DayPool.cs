@@ -57,22 +57,18 @@ public sealed class DayPool
     public Heatmap ToHeatmap()
     {
         votes.Count();
+        var quantile = quantiles?.Quantiles(query.Statistic switch { Statistic.P10 => 0.1, Statistic.P90 => 0.9, _ => 0.5 });
         var steps = query.Measure.Info().StepsPerUnit;
         return columns.Assemble(votes, cell =>
         {
             var (lower, upper) = intervals is null || votes.Stations(cell) == 0 ? (double.NaN, double.NaN) : intervals.Interval(cell, votes);
-            return new(Value(cell) / steps, lower, upper, votes.Stations(cell), votes.Days(cell));
+            return new((quantile?[cell] ?? Value(cell)) / steps, lower, upper, votes.Stations(cell), votes.Days(cell));
         });
     }
 
-    private double Value(int cell) => query.Statistic switch
-    {
-        Statistic.Mean => votes.Mean(cell),
-        Statistic.Sd when daySquares is null => Math.Sqrt(votes.Variance(cell)),
-        Statistic.Sd => votes.Days(cell) < 2 ? double.NaN : Math.Sqrt(daySquares[cell] / (votes.Days(cell) - 1)),
-        Statistic.Median => quantiles!.Quantile(cell, 0.5),
-        Statistic.P10 => quantiles!.Quantile(cell, 0.1),
-        Statistic.P90 => quantiles!.Quantile(cell, 0.9),
-        _ => throw new InvalidOperationException($"No value for {query.Statistic}."),
-    };
+    private double Value(int cell) =>
+        query.Statistic == Statistic.Mean ? votes.Mean(cell)
+        : daySquares is null ? Math.Sqrt(votes.Variance(cell))
+        : votes.Days(cell) < 2 ? double.NaN
+        : Math.Sqrt(daySquares[cell] / (votes.Days(cell) - 1));
 }

@@ -36,12 +36,13 @@ internal sealed class IntervalPool(HeatmapQuery query, int size)
             inverseLooks[cell] += count > 0 ? days.InverseLooks[cell] / (count * count) : 0;
         }
 
+        var isFull = days.Count >= query.MinDays && !days.Days.AsSpan().ContainsAnyExcept(days.Count);
         foreach (var month in days.Months)
         {
             BeginMonth(month);
             for (var day = month.FirstDay; day < month.FirstDay + month.DayCount; day++)
             {
-                DayKernel.AddDeviations(days.Values(day), means, weights, counts, PlanesOf(days.Date(day).DayNumber), stationSquares);
+                Add(days.Values(day), PlanesOf(days.Date(day).DayNumber), isFull);
             }
         }
 
@@ -88,6 +89,19 @@ internal sealed class IntervalPool(HeatmapQuery query, int size)
 
         var freedom = deviations[cell] - stationMonths[cell] - (known - months);
         return stations < 2 || freedom < 1 ? 0 : Math.Max(0, squares[cell] - between) / freedom * inverse / ((double)stations * stations);
+    }
+
+    private void Add(ReadOnlySpan<int> row, DatePlanes date, bool isFull)
+    {
+        if (!isFull)
+        {
+            DayKernel.AddDeviations(row, means, weights, counts, date, stationSquares);
+            return;
+        }
+
+        DayKernel.AddFullDeviations(row, means, date.Deviations, stationSquares);
+        date.FullWeight += weights[0];
+        date.FullCount += (int)counts[0];
     }
 
     private void BeginMonth(StationMonth month)

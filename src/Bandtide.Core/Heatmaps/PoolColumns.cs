@@ -44,6 +44,18 @@ internal sealed class PoolColumns
         return copiesByShift[shift] ??= Build(shift);
     }
 
+    /// <summary>Whether copies reach every cell.</summary>
+    public bool AreFull(ReadOnlySpan<RowCopy> copies)
+    {
+        var reached = 0;
+        foreach (var copy in copies)
+        {
+            reached += copy.Length;
+        }
+
+        return reached == Size;
+    }
+
     /// <summary>The heatmap of all bands that have a station in any hour, by ascending frequency.</summary>
     /// <param name="votes">Tells which cells have one.</param>
     /// <param name="cell">Gives the value of a cell of the pool; may be called for cells without a station.</param>

@@ -5,68 +5,105 @@ namespace Bandtide.Core.Heatmaps;
 
 /// <summary>Gathers the values of all station-days of each cell and gives their weighted quantiles.</summary>
 /// <remarks>
-/// Values are whole numbers, so those of a cell are counted into a table of its own range rather than sorted. What waits to
-/// be counted is folded in whenever it grows large, so that memory is bounded by the number of distinct values.
+/// A station-day weighs 1/(days of its station), and where squares vote 1/(stations of its square) of that. Values are whole numbers,
+/// so those of a cell are counted into a table of its own range rather than sorted. What waits to be counted is folded into tables
+/// of distinct values whenever it exceeds 64 MB; where squares vote it waits to the end, since only then the weights are known.
 /// </remarks>
 /// <param name="query">Its vote and <c>mindays</c> count here.</param>
 /// <param name="size">Number of cells.</param>
 internal sealed class QuantilePool(HeatmapQuery query, int size)
 {
-    private const int MaxWaiting = 16_000_000;
+    private const long MaxWaiting = 32_000_000;
 
-    private readonly List<StationValues> waiting = [];
-    private readonly ValueTable?[] folded = new ValueTable?[size];
-    private readonly ValueCounter counter = new();
+    private readonly List<StationRows> waiting = [];
     private readonly Dictionary<MaidenheadLocator, int[]> stationsInSquare = [];
-    private int waitingValues;
+    private readonly ValueCounter counter = new();
+    private readonly int[] lows = Filled(size, int.MaxValue);
+    private readonly int[] highs = Filled(size, int.MinValue);
+    private ValueTable?[] folded = new ValueTable?[size];
+    private long waitingValues;
 
     /// <summary>Adds the days of one station.</summary>
     public void Add(Station station, StationDays days)
     {
-        var values = StationValues.From(station.Square, days, query.MinDays);
-        waiting.Add(values);
-        waitingValues += values.Count;
+        for (var day = 0; day < days.Count; day++)
+        {
+            DayKernel.AddExtremes(days.Values(day), lows, highs);
+        }
+
+        var rows = new StationRows(station.Square, days, query.MinDays);
+        waiting.Add(rows);
+        waitingValues += (long)rows.Count * size;
         if (query.Vote == VoteUnit.Square)
         {
-            var counts = stationsInSquare.TryGetValue(station.Square, out var known) ? known : stationsInSquare[station.Square] = new int[size];
-            for (var cell = 0; cell < size; cell++)
-            {
-                counts[cell] += values.Of(cell).IsEmpty ? 0 : 1;
-            }
+            CountInSquare(rows);
         }
         else if (waitingValues > MaxWaiting)
         {
-            Fold();
+            folded = Tables();
+            waiting.Clear();
+            waitingValues = 0;
         }
     }
 
-    /// <summary>The quantile of a cell in stored steps, or NaN without a value.</summary>
-    public double Quantile(int cell, double probability) => Table(cell)?.Quantile(probability) ?? double.NaN;
-
-    private void Fold()
+    /// <summary>A quantile of each cell in stored steps, NaN without a value.</summary>
+    public double[] Quantiles(double probability)
     {
-        for (var cell = 0; cell < size; cell++)
-        {
-            folded[cell] = Table(cell);
-        }
-
-        waiting.Clear();
-        waitingValues = 0;
+        var quantiles = new double[size];
+        Count((cell, table) => quantiles[cell] = table.Quantile(probability));
+        return quantiles;
     }
 
-    private ValueTable? Table(int cell)
+    private ValueTable[] Tables()
     {
-        counter.Begin(folded[cell], waiting, cell);
-        foreach (var station in waiting)
+        var tables = new ValueTable[size];
+        Count((cell, table) => tables[cell] = table);
+        return tables;
+    }
+
+    private void Count(Action<int, ValueTable> take)
+    {
+        for (var first = 0; first < size; first += ValueCounter.Lanes)
         {
-            var values = station.Of(cell);
-            if (!values.IsEmpty)
+            var lanes = Math.Min(ValueCounter.Lanes, size - first);
+            counter.Begin(first, lows.AsSpan(first, lanes), highs.AsSpan(first, lanes));
+            for (var lane = 0; lane < lanes; lane++)
             {
-                var stations = query.Vote == VoteUnit.Square ? stationsInSquare[station.Square][cell] : 1;
-                counter.Add(values, 1.0 / ((double)values.Length * stations));
+                if (folded[first + lane] is { } before)
+                {
+                    counter.Add(lane, before);
+                }
+            }
+
+            foreach (var rows in waiting)
+            {
+                counter.Add(rows, stationsInSquare.GetValueOrDefault(rows.Square));
+            }
+
+            for (var lane = 0; lane < lanes; lane++)
+            {
+                take(first + lane, counter.Table(lane));
             }
         }
+    }
 
-        return counter.End();
+    private void CountInSquare(StationRows rows)
+    {
+        if (!stationsInSquare.TryGetValue(rows.Square, out var counts))
+        {
+            stationsInSquare.Add(rows.Square, counts = new int[size]);
+        }
+
+        for (var cell = 0; cell < size; cell++)
+        {
+            counts[cell] += rows.Days[cell] > 0 ? 1 : 0;
+        }
+    }
+
+    private static int[] Filled(int count, int value)
+    {
+        var array = new int[count];
+        Array.Fill(array, value);
+        return array;
     }
 }

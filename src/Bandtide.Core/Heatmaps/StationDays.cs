@@ -112,13 +112,14 @@ internal sealed class StationDays(HeatmapQuery query, PoolColumns columns)
         }
 
         var plane = Measures.Values(cells, query.Measure, scratch);
-        if (plane.IsEmpty)
+        var copies = plane.IsEmpty ? default : columns.Copies(cells.BandIds, shift);
+        if (copies.Length == 0 || !columns.AreFull(copies))
         {
-            return;
+            row.Fill(CellGrid.Missing);
         }
 
         var sweeps = cells.Plane(Quantity.Sweeps);
-        foreach (var (source, target, length) in columns.Copies(cells.BandIds, shift))
+        foreach (var (source, target, length) in copies)
         {
             var placed = row.Slice(target, length);
             plane.Slice(source, length).CopyTo(placed);
@@ -145,8 +146,6 @@ internal sealed class StationDays(HeatmapQuery query, PoolColumns columns)
             Array.Resize(ref values, Math.Max(31 * columns.Size, 2 * values.Length));
         }
 
-        var row = values.AsSpan(start, columns.Size);
-        row.Fill(CellGrid.Missing);
-        return row;
+        return values.AsSpan(start, columns.Size);
     }
 }

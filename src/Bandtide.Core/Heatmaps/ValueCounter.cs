@@ -1,79 +1,98 @@
 namespace Bandtide.Core.Heatmaps;
 
-/// <summary>Counts the values of one cell at a time into a table from its least to its largest value.</summary>
+/// <summary>
+/// Counts the values of eight neighbouring cells at a time, each into a table of slots from its least to its largest value.
+/// </summary>
 internal sealed class ValueCounter
 {
-    private Slot[] slots = [];
-    private int least;
-    private int range;
+    /// <summary>Number of cells counted side by side: sixteen bytes of each row.</summary>
+    public const int Lanes = 8;
 
-    /// <summary>Makes room for a cell's values and takes over what was counted before.</summary>
-    public void Begin(ValueTable? before, List<StationValues> waiting, int cell)
+    private readonly int[] starts = new int[Lanes + 1];
+    private readonly int[] least = new int[Lanes];
+    private readonly int[] parts = new int[Lanes];
+    private readonly double[] weights = new double[Lanes];
+    private ValueSlot[] slots = [];
+    private int first;
+
+    /// <summary>Begins a block of cells.</summary>
+    /// <param name="cell">The first.</param>
+    /// <param name="lows">Least value of each cell; the block is as long as this, at most <see cref="Lanes"/>.</param>
+    /// <param name="highs">Largest value of each cell, below the least where there is none.</param>
+    public void Begin(int cell, ReadOnlySpan<int> lows, ReadOnlySpan<int> highs)
     {
-        var (low, high) = before is null ? (int.MaxValue, int.MinValue) : (before.Values[0], before.Values[^1]);
-        foreach (var station in waiting)
+        first = cell;
+        Array.Clear(parts);
+        for (var lane = 0; lane < Lanes; lane++)
         {
-            foreach (var value in station.Of(cell))
+            var range = lane < lows.Length ? Math.Max(0, highs[lane] - lows[lane] + 1L) : 0;
+            least[lane] = lane < lows.Length ? lows[lane] : 0;
+            starts[lane + 1] = starts[lane] + (int)range;
+        }
+
+        if (slots.Length < starts[Lanes])
+        {
+            slots = new ValueSlot[starts[Lanes]];
+        }
+
+        slots.AsSpan(0, starts[Lanes]).Clear();
+    }
+
+    /// <summary>Takes over what was counted before.</summary>
+    public void Add(int lane, ValueTable before)
+    {
+        for (var i = 0; i < before.Values.Length; i++)
+        {
+            slots[starts[lane] + before.Values[i] - least[lane]] = before.Slots[i];
+        }
+    }
+
+    /// <summary>Counts the days of a station.</summary>
+    /// <param name="rows">The days.</param>
+    /// <param name="stations">Number of stations that share one vote with it, of each cell; empty where none does.</param>
+    public void Add(StationRows rows, ReadOnlySpan<int> stations)
+    {
+        var lanes = Math.Min(Lanes, rows.Days.Length - first);
+        for (var lane = 0; lane < lanes; lane++)
+        {
+            parts[lane] = rows.Days[first + lane] * (stations.IsEmpty ? 1 : stations[first + lane]);
+            weights[lane] = 1.0 / parts[lane];
+        }
+
+        for (var row = 0; row < rows.Count; row++)
+        {
+            var distances = rows.Distances(row).Slice(first, lanes);
+            var offset = rows.Base(row);
+            for (var lane = 0; lane < distances.Length; lane++)
             {
-                low = Math.Min(low, value);
-                high = Math.Max(high, value);
+                if (distances[lane] != StationRows.Missing)
+                {
+                    slots[starts[lane] + offset + distances[lane] - least[lane]].Add(parts[lane], weights[lane]);
+                }
             }
         }
-
-        (least, range) = (low, high < low ? 0 : high - low + 1);
-        if (slots.Length < range)
-        {
-            slots = new Slot[range];
-        }
-
-        for (var i = 0; before is not null && i < before.Values.Length; i++)
-        {
-            slots[before.Values[i] - least] = new(before.Weights[i], before.Lightest[i], before.Heaviest[i]);
-        }
     }
 
-    /// <summary>Counts values that weigh the same.</summary>
-    public void Add(ReadOnlySpan<int> values, double weight)
+    /// <summary>What was counted in a cell of the block.</summary>
+    public ValueTable Table(int lane)
     {
-        foreach (var value in values)
-        {
-            ref var slot = ref slots[value - least];
-            slot = slot.Weight == 0
-                ? new(weight, weight, weight)
-                : new(slot.Weight + weight, Math.Min(slot.Lightest, weight), Math.Max(slot.Heaviest, weight));
-        }
-    }
-
-    /// <summary>What was counted, or <c>null</c> for nothing; the counter is empty again.</summary>
-    public ValueTable? End()
-    {
-        var counted = slots.AsSpan(0, range);
+        var counted = slots.AsSpan(starts[lane], starts[lane + 1] - starts[lane]);
         var distinct = 0;
         foreach (ref var slot in counted)
         {
-            distinct += slot.Weight > 0 ? 1 : 0;
+            distinct += slot.Largest > 0 ? 1 : 0;
         }
 
-        if (distinct == 0)
-        {
-            return null;
-        }
-
-        var table = new ValueTable(new int[distinct], new double[distinct], new double[distinct], new double[distinct]);
+        var table = new ValueTable(new int[distinct], new ValueSlot[distinct]);
         var next = 0;
         for (var i = 0; i < counted.Length; i++)
         {
-            if (counted[i].Weight > 0)
+            if (counted[i].Largest > 0)
             {
-                table.Values[next] = least + i;
-                (table.Weights[next], table.Lightest[next], table.Heaviest[next]) = (counted[i].Weight, counted[i].Lightest, counted[i].Heaviest);
-                next++;
+                (table.Values[next], table.Slots[next++]) = (least[lane] + i, counted[i]);
             }
         }
 
-        counted.Clear();
         return table;
     }
-
-    private readonly record struct Slot(double Weight, double Lightest, double Heaviest);
 }

@@ -1,5 +1,6 @@
 using Bandtide.Core.Geography;
 using Bandtide.Core.Stations;
+using static System.FormattableString;
 
 namespace Bandtide.Server.Figures;
 
@@ -29,7 +30,8 @@ internal static class StationMapSvg
         {
             var place = station.Square.Centre;
             var (x, y) = ((place.LongitudeDegrees + 180) / 3.6, (north - place.LatitudeDegrees) / (north - south) * 100);
-            svg.Add($"""<a href="stations/{station.Code}" aria-label="{station.Name}"><circle class="fig-reach" cx="{x}%" cy="{y}%" r="12" fill="transparent"/><circle class="fig-place" cx="{x}%" cy="{y}%" r="4.5" stroke-width="1.5"/>""");
+            var name = stations.Count <= MostNumbers ? Invariant($"{index + 1} {station.Name}") : station.Name;
+            svg.Add($"""<a href="stations/{station.Code}" aria-label="{name}"><circle class="fig-reach" cx="{x}%" cy="{y}%" r="12" fill="transparent"/><circle class="fig-place" cx="{x}%" cy="{y}%" r="4.5" stroke-width="1.5"/>""");
             if (stations.Count <= MostNumbers)
             {
                 svg.Add($"""<text class="fig-number" x="{x}%" y="{y}%" dx="7" dy="4">{index + 1}</text>""");

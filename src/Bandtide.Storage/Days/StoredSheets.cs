@@ -8,13 +8,19 @@ namespace Bandtide.Storage.Days;
 /// <summary>Unpacks stored sheets.</summary>
 internal static class StoredSheets
 {
+    private static readonly Quantity[] All = Enum.GetValues<Quantity>();
+
     /// <summary>The cells of a stored sheet.</summary>
     /// <exception cref="InvalidDataException">The bytes are damaged; the message names station and date.</exception>
-    public static CellGrid Decode(int stationId, int date, byte[] bytes)
+    public static CellGrid Decode(int stationId, int date, byte[] bytes) => Decode(stationId, date, bytes, All);
+
+    /// <summary>Some quantities of a stored sheet's cells; sweeps and occupancy are there always.</summary>
+    /// <exception cref="InvalidDataException">The bytes are damaged; the message names station and date.</exception>
+    public static CellGrid Decode(int stationId, int date, byte[] bytes, ReadOnlySpan<Quantity> quantities)
     {
         try
         {
-            return SheetCodec.Decode(bytes);
+            return SheetCodec.Decode(bytes, quantities);
         }
         catch (SheetCorruptException exception)
         {

@@ -2,7 +2,6 @@ using Bandtide.Core.Heatmaps;
 using Bandtide.Core.Sheets;
 using Bandtide.Core.Stations;
 using Bandtide.Core.Time;
-using Bandtide.Storage.Days;
 using Bandtide.Storage.Engine;
 
 namespace Bandtide.Storage.Heatmaps;
@@ -25,30 +24,42 @@ internal sealed class SheetHeatmaps(StoreDatabase database)
     private static async Task<PooledHeatmap> PoolAsync(StoreSession session, HeatmapSelection selection, CancellationToken ct)
     {
         var pool = new DayPool(selection.Query, selection.Network.Plan);
-        var probe = new MeasureProbe(selection.Query.Measure, selection.Network.Plan.Layer(selection.Query.Layer));
+        var unpacker = new SheetUnpacker(selection.Query.Measure, selection.Network.Plan.Layer(selection.Query.Layer));
         var reporting = new List<Station>();
-        foreach (var part in selection.Parts.Where(part => part.Months.Count > 0))
+
+        // While one round is unpacked and pooled, the next is read.
+        var pooling = Task.CompletedTask;
+        try
         {
-            foreach (var stations in part.Stations.Chunk(Math.Max(1, SheetsPerRound / part.Months.Sum(month => month.Days))))
+            foreach (var part in selection.Parts.Where(part => part.Months.Count > 0))
             {
-                var sheets = await ReadAsync(session, stations, part.Months, ct);
-                foreach (var station in stations)
+                foreach (var stations in part.Stations.Chunk(Math.Max(1, SheetsPerRound / part.Months.Sum(month => month.Days))))
                 {
-                    ct.ThrowIfCancellationRequested();
-                    List<DaySheet> days = [.. sheets[station.Id]
-                        .OrderBy(day => day.Date)
-                        .Select(day => new DaySheet(EpochDay.ToDate(day.Date), StoredSheets.Decode(station.Id, day.Date, day.Sheet)))
-                        .Where(day => probe.Finds(day.Cells))];
-                    if (days.Count > 0)
-                    {
-                        reporting.Add(station);
-                        pool.Add(station, days);
-                    }
+                    var sheets = await ReadAsync(session, stations, part.Months, ct);
+                    await pooling;
+                    pooling = Task.Run(() => Add(stations, sheets), ct);
                 }
             }
         }
+        finally
+        {
+            await pooling;
+        }
 
         return new(pool.ToHeatmap(), reporting);
+
+        void Add(Station[] stations, ILookup<int, (int Date, byte[] Sheet)> sheets)
+        {
+            foreach (var station in stations)
+            {
+                ct.ThrowIfCancellationRequested();
+                if (unpacker.Unpack(station, sheets[station.Id]) is { Count: > 0 } days)
+                {
+                    reporting.Add(station);
+                    pool.Add(station, days);
+                }
+            }
+        }
     }
 
     private static async Task<ILookup<int, (int Date, byte[] Sheet)>> ReadAsync(

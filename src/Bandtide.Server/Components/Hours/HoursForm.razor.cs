@@ -76,7 +76,7 @@ public sealed partial class HoursForm : ComponentBase
         builder.AddAttribute(8, "type", "month");
         builder.AddAttribute(9, "required", true);
         builder.AddAttribute(10, "pattern", @"\d{4}-\d{2}");
-        builder.AddAttribute(11, "value", Address.Value(name));
+        builder.AddAttribute(11, "value", YearMonth.TryParse(Address.Value(name), out var month) ? month.ToString() : null);
         builder.AddAttribute(12, "onchange", EventCallback.Factory.Create<ChangeEventArgs>(this, change => Change(name, change)));
         builder.CloseElement();
         builder.CloseElement();
