@@ -52,12 +52,11 @@ internal sealed class DemoLoader(
     {
         foreach (var demo in DemoStations.All)
         {
-            if (await network.CreateStationAsync(new(demo.Code, demo.Name, demo.Place, demo.Unit, []), ct) is StationCreation.Created created)
+            await network.CreateStationAsync(new(demo.Code, demo.Name, demo.Place, demo.Unit, []), ct);
+            var station = (await network.GetAsync(ct)).FindStation(demo.Code)!;
+            foreach (var setup in demo.Setups.Where(setup => station.Setups.All(known => known.ValidFrom != setup.ValidFrom)))
             {
-                foreach (var setup in demo.Setups)
-                {
-                    await network.AddSetupAsync(created.Station, setup, ct);
-                }
+                await network.AddSetupAsync(station, setup, ct);
             }
         }
 
