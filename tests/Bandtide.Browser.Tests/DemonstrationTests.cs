@@ -1,3 +1,4 @@
+using System.Net.Http.Headers;
 using Bandtide.Browser.Tests.Screens;
 using Bandtide.Browser.Tests.Site;
 using Bandtide.Server.Demo;
@@ -24,6 +25,18 @@ public sealed class DemonstrationTests(PublicSite site)
                 await visit.OpenAsync(address);
                 await Assertions.Expect(visit.Page.GetByText("Invented demonstration data")).ToBeVisibleAsync();
             }
+
+            // The key that the start prints is good for the station that the page names.
+            await visit.OpenAsync("/data");
+            var line = (await visit.Page.Locator("#example-curl code").TextContentAsync())!;
+            using var client = new HttpClient();
+            using var request = new HttpRequestMessage(HttpMethod.Put, line.Split(' ', StringSplitOptions.RemoveEmptyEntries).Single(word => word.StartsWith("http", StringComparison.Ordinal)))
+            {
+                Headers = { Authorization = new("Bearer", DemoScenario.Key) },
+                Content = new StringContent((await visit.Page.Locator("#example-sheet code").TextContentAsync())!, new MediaTypeHeaderValue("text/csv")),
+            };
+            using var answer = await client.SendAsync(request, TestContext.Current.CancellationToken);
+            Assert.True(answer.IsSuccessStatusCode, answer.StatusCode.ToString());
 
             await HoursScreen.OpenAsync(visit, "?region=all&month=2026-06");
             await Assertions.Expect(visit.Page.GetByText("Invented demonstration data")).ToBeVisibleAsync();

@@ -42,8 +42,8 @@ internal sealed class DemoLoader(
                 CultureInfo.InvariantCulture,
                 $"Demonstration data, invented: {100 * count / stations.Count,3} %, {count} of {stations.Count} stations, {pair.Demo.Code} {added} days, {clock.GetElapsedTime(started).TotalSeconds:0.0} s"));
         });
-        await keys.EnsureAsync(DemoScenario.Key, stations[0].Station.Id, loopbackOnly: true, "demonstration", ct);
-        await output.WriteLineAsync($"Key of the station {stations[0].Demo.Code}, good from this machine alone: {DemoScenario.Key}");
+        await keys.EnsureAsync(DemoScenario.Key, stations.Single(pair => string.Equals(pair.Demo.Code, DemoScenario.KeyStation, StringComparison.Ordinal)).Station.Id, loopbackOnly: true, "demonstration", ct);
+        await output.WriteLineAsync($"Key of the station {DemoScenario.KeyStation}, good from this machine alone: {DemoScenario.Key}");
     }
 
     private static bool IsSame(DemoStation demo, Station station) => string.Equals(demo.Code, station.Code, StringComparison.Ordinal);

@@ -6,7 +6,10 @@ internal static class DemoScenario
     /// <summary>Code of the region that lists its stations. Its presence says that a store holds the scenario.</summary>
     public const string Region = "demonstration";
 
-    /// <summary>The key of the first station: known to everyone, good from this machine alone.</summary>
+    /// <summary>Code of the station that the demonstration's key is for.</summary>
+    public const string KeyStation = "alder-mill";
+
+    /// <summary>The key of that station: known to everyone, good from this machine alone.</summary>
     public const string Key = "demonstration-key-for-this-machine-only";
 
     /// <summary>First date with data.</summary>

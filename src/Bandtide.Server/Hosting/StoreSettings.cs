@@ -7,12 +7,19 @@ namespace Bandtide.Server.Hosting;
 internal static class StoreSettings
 {
     private const string Connection = "Bandtide";
+    private static readonly string[] Known = [nameof(StoreOptions.Provider), nameof(StoreOptions.DataDirectory)];
 
     /// <summary>The store of the configuration; a relative data directory is taken from where the command was typed.</summary>
     /// <exception cref="SettingException">A setting is missing or wrong.</exception>
     public static StoreOptions Read(IConfiguration configuration)
     {
         var section = configuration.GetSection("Storage");
+        if (section.GetChildren().FirstOrDefault(child => !Known.Contains(child.Key, StringComparer.OrdinalIgnoreCase)) is { } unknown)
+        {
+            // A misspelt data directory would quietly fill another one.
+            throw new SettingException($"Storage:{unknown.Key} is not a setting; there are {string.Join(" and ", Known.Select(name => "Storage:" + name))}.");
+        }
+
         var options = new StoreOptions
         {
             Provider = section["Provider"] is { Length: > 0 } provider ? provider : StoreProvider.Sqlite,

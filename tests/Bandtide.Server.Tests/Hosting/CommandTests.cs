@@ -66,6 +66,7 @@ public sealed class CommandTests
 
     [Theory]
     [InlineData("Storage__Provider", "oracle", "Storage:Provider")]
+    [InlineData("Storage__Path", "elsewhere", "Storage:Path")]
     [InlineData("Storage__Provider", "postgres", "ConnectionStrings:Bandtide")]
     [InlineData("Setup__CoordinatorKey", "too-short", "Setup:CoordinatorKey")]
     [InlineData("RateLimits__KeyPerSecond", "0", "RateLimits:KeyPerSecond")]
